@@ -1,4 +1,5 @@
-import type { Span } from '../diagnostics/diagnostic.ts';
+import type { Diagnostic, Span } from '../diagnostics/diagnostic.ts';
+import type { Statement } from '../script/statement.ts';
 import type { Dimension } from '../units/dimension.ts';
 
 /** How a name of the script gets its value. */
@@ -28,7 +29,7 @@ export interface QuantityInfo {
 
 /** The finite grid of a script, or why there is none. */
 export interface GridInfo {
-  /** Number of grid points; 1 for a script that draws nothing. */
+  /** Number of grid points; 1 for a script that draws nothing. Draws are numbered from 1 to `size`. */
   size: number;
   /** True when `scatter` makes every draw number new, so that there is no finite grid. */
   open: boolean;
@@ -42,4 +43,49 @@ export interface DrawValues {
   kept: boolean;
   /** Spans of conditions that failed and of the first undefined value, if any. */
   discardedBy: Span | null;
+}
+
+/** A script that has no error; plain, cloneable data. Evaluators are built from it on first use. */
+export interface CompiledScript {
+  readonly source: string;
+  readonly statements: readonly Statement[];
+  readonly quantities: readonly QuantityInfo[];
+  readonly grid: GridInfo;
+}
+
+/** What compiling gives: a script unless there is an error among the diagnostics; what is known is always told. */
+export interface Compilation {
+  script: CompiledScript | null;
+  diagnostics: Diagnostic[];
+  quantities: QuantityInfo[];
+  grid: GridInfo;
+}
+
+/** Which precision each constant is taken at: all full, all as data sheets print them, or values by name (SI). */
+export type ConstantPrecision = 'full' | 'dataSheet' | ReadonlyMap<string, number>;
+
+/** Draws by number (from 1), as a list or as `count` following ones. */
+export type DrawSelection = Float64Array | { from: number; count: number };
+
+export interface EvaluationOptions {
+  /** Only what these names need is evaluated; default: every name. */
+  wanted?: readonly string[];
+  /** Whether `kept` is worked out; default true. When false, `kept` is all ones. */
+  conditions?: boolean;
+  /** Computed quantities that are rounded to so many significant figures before they are used further. */
+  roundIntermediates?: ReadonlyMap<string, number>;
+  constants?: ConstantPrecision;
+  /** Columns imposed on names in place of their own statements, SI, one value a draw. */
+  pinned?: ReadonlyMap<string, Float64Array>;
+}
+
+/** Values of a block of draws; every column is as long as `draws`. */
+export interface BlockValues {
+  draws: Float64Array;
+  /** Scalars by name, SI; a condition is 1 or 0. */
+  columns: ReadonlyMap<string, Float64Array>;
+  /** Series by name: one column an element. */
+  series: ReadonlyMap<string, readonly Float64Array[]>;
+  /** 1 where every `require` holds. */
+  kept: Uint8Array;
 }

@@ -1,0 +1,58 @@
+/** The engine's public face: the only file of this folder that others import. */
+export type * from './diagnostics/diagnostic.ts';
+export {
+  dimension,
+  DIMENSIONLESS,
+  divideDimensions,
+  isDimensionless,
+  multiplyDimensions,
+  powerOfDimension,
+  sameDimension,
+  type Dimension,
+  type Rational,
+} from './units/dimension.ts';
+export type * from './units/unit.ts';
+export { NO_UNIT } from './units/unit.ts';
+export { readUnit, type UnitReading } from './units/read-unit.ts';
+export { convert, fromSI, toSI } from './units/convert.ts';
+export {
+  formatNumber,
+  formatQuantity,
+  type PrintedNumber,
+  type PrintedQuantity,
+  type PrintPrecision,
+} from './units/format.ts';
+export { roundToDecimals, roundToFigures } from './units/rounding.ts';
+export { CONSTANTS, type PhysicalConstant } from './physics/constants.ts';
+export type * from './script/expression-tree.ts';
+export type * from './script/statement.ts';
+export { describeNames, type NameDescription } from './script/describe-names.ts';
+export type * from './compile/compiled-script.ts';
+export { compileScript } from './compile/compile-script.ts';
+export { evaluateBlock, evaluateDraw } from './compile/evaluate.ts';
+export {
+  buildExpression,
+  compileExpression,
+  evaluateExpression,
+  expressionText,
+  workingOf,
+  type CompiledExpression,
+  type ExpressionCompilation,
+} from './compile/expressions.ts';
+export { dependenciesOf, type Dependencies } from './compile/dependencies.ts';
+export {
+  coverageStatement,
+  EXHAUSTIVE_LIMIT,
+  firstKeptDraw,
+  planDraws,
+  randomDraw,
+  type DrawPlan,
+} from './draws/sampling.ts';
+export { readResponse, type ResponseReading } from './responses/read-response.ts';
+export {
+  markResponse,
+  type MarkingTarget,
+  type Verdict,
+  type VerdictKind,
+  type WrongWorking,
+} from './responses/mark-response.ts';
