@@ -1,12 +1,12 @@
 import type { Diagnostic, Span } from '../diagnostics/diagnostic.ts';
+import type { Shape } from '../script/scope.ts';
 import type { Statement } from '../script/statement.ts';
 import type { Dimension } from '../units/dimension.ts';
 
 /** How a name of the script gets its value. */
 export type QuantityKind = 'drawn' | 'given' | 'computed';
 
-/** A scalar, a true-or-false condition, or a series of a fixed number of values. */
-export type Shape = { kind: 'scalar' } | { kind: 'condition' } | { kind: 'series'; length: number };
+export type { Shape };
 
 /** What is known of one name before any draw is made; plain data. */
 export interface QuantityInfo {

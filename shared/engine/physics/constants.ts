@@ -90,7 +90,7 @@ const TABLE: readonly PhysicalConstant[] = [
   constant('sigma_SB', '\\sigma', 'Stefan–Boltzmann constant', '5.670374419e-8', EXACT, 'W m^-2 K^-4'),
   constant('R_inf', 'R_\\infty', 'Rydberg constant', '10973731.568157', '0.000012', 'm^-1'),
   constant('a0', 'a_0', 'Bohr radius', '5.29177210544e-11', '0.00000000082e-11', 'm'),
-  constant('alpha', '\\alpha', 'fine-structure constant', '7.2973525643e-3', '0.0000000011e-3', ''),
+  constant('alpha_fs', '\\alpha', 'fine-structure constant', '7.2973525643e-3', '0.0000000011e-3', ''),
 ];
 
 /** Every constant by name. */

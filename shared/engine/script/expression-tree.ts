@@ -1,37 +1,11 @@
 import type { Span } from '../diagnostics/diagnostic.ts';
 import type { Unit } from '../units/unit.ts';
+import type { FunctionName } from './functions.ts';
 
 export type BinaryOperator = '+' | '-' | '*' | '/' | '^';
 export type ComparisonOperator = '<' | '<=' | '>' | '>=' | '==' | '!=';
 
-/** The functions that scripts may call; series functions take one or two series and give a scalar. */
-export const FUNCTION_NAMES = [
-  'sqrt',
-  'cbrt',
-  'exp',
-  'ln',
-  'log10',
-  'sin',
-  'cos',
-  'tan',
-  'asin',
-  'acos',
-  'atan',
-  'abs',
-  'min',
-  'max',
-  'floor',
-  'ceil',
-  'round',
-  'mean',
-  'least',
-  'greatest',
-  'sum',
-  'slope',
-  'intercept',
-  'quantum',
-] as const;
-export type FunctionName = (typeof FUNCTION_NAMES)[number];
+export type { FunctionName };
 
 /**
  * An expression as a tree of plain data. Transform it freely (each node keeps the span it came from, which

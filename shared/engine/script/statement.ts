@@ -2,7 +2,7 @@ import type { Span } from '../diagnostics/diagnostic.ts';
 import type { Unit } from '../units/unit.ts';
 import type { ExpressionTree } from './expression-tree.ts';
 
-/** `count` levels from `first` in steps of `step`, each an integer times 10^power times the unit. */
+/** `count` levels from `first` in steps of `step`, each a whole number times 10^power of `unit`. */
 export interface StepLevels {
   kind: 'steps';
   count: number;
@@ -22,7 +22,15 @@ export interface ChoiceLevels {
 export type Statement =
   | { kind: 'drawn'; name: string; nameSpan: Span; span: Span; levels: StepLevels | ChoiceLevels }
   /** Seeded Gaussian reading error of standard deviation `deviation`. */
-  | { kind: 'scatter'; name: string; nameSpan: Span; span: Span; deviation: ExpressionTree }
+  | {
+      kind: 'scatter';
+      name: string;
+      nameSpan: Span;
+      span: Span;
+      deviation: ExpressionTree;
+      /** Number of values of a series; 0 for a single value. */
+      length: number;
+    }
   | {
       kind: 'given';
       name: string;
