@@ -34,11 +34,11 @@ export {
   buildExpression,
   compileExpression,
   evaluateExpression,
-  expressionText,
-  workingOf,
   type CompiledExpression,
   type ExpressionCompilation,
 } from './compile/expressions.ts';
+export { workingOf } from './compile/working.ts';
+export { expressionText } from './script/expression-text.ts';
 export { dependenciesOf, type Dependencies } from './compile/dependencies.ts';
 export {
   coverageStatement,

@@ -1,3 +1,5 @@
+import type { Span } from '../diagnostics/diagnostic.ts';
+import { roundInUnit } from '../units/rounding.ts';
 import type {
   BlockValues,
   CompiledScript,
@@ -5,14 +7,129 @@ import type {
   DrawValues,
   EvaluationOptions,
 } from './compiled-script.ts';
+import { constantValue } from './constant-precision.ts';
+import { selectionLength } from './draw-columns.ts';
+import { digitsOfDraw, gridPlaces, requireDraw } from './grid.ts';
+import { levelValue } from './levels.ts';
+import { evaluateTree, type PlainValue } from './plain-evaluate.ts';
+import { BLOCK_LENGTH, isSeries, type Register } from './program.ts';
+import { gaussian, seedOfName } from './scatter.ts';
+import { buildScriptProgram, roundingUnit, type ScriptProgram } from './script-program.ts';
+
+/** Options of one draw: as for a block, with single values pinned. */
+export type DrawOptions = Pick<EvaluationOptions, 'roundIntermediates' | 'constants'> & {
+  pinned?: ReadonlyMap<string, number>;
+};
+
+function isDefined(value: PlainValue): boolean {
+  return typeof value === 'number' ? Number.isFinite(value) : value.every(Number.isFinite);
+}
 
 /** One draw by the plain scalar reference evaluator. Draws are numbered from 1; throws RangeError outside the grid. */
-export function evaluateDraw(
-  script: CompiledScript,
-  draw: number,
-  options: Omit<EvaluationOptions, 'pinned'> & { pinned?: ReadonlyMap<string, number> } = {},
-): DrawValues {
-  throw new Error(`no evaluator yet: ${script.source.length} ${draw} ${Object.keys(options).length}`);
+export function evaluateDraw(script: CompiledScript, draw: number, options: DrawOptions = {}): DrawValues {
+  requireDraw(script, draw);
+  const digits = digitsOfDraw(script, draw);
+  const digitOf = new Map(gridPlaces(script).map((place, index) => [place.name, digits[index] ?? 0]));
+  const values = new Map<string, PlainValue>();
+  const scope = {
+    name: (name: string): PlainValue => values.get(name) ?? NaN,
+    constant: (name: string): number => constantValue(name, options.constants),
+  };
+  let kept = true;
+  let discardedBy: Span | null = null;
+  for (const statement of script.statements) {
+    if (statement.kind === 'require') {
+      if (evaluateTree(statement.tree, scope) !== 1) {
+        kept = false;
+        discardedBy ??= statement.span;
+      }
+      continue;
+    }
+    const { name } = statement;
+    let value: PlainValue;
+    const pinned = options.pinned?.get(name);
+    if (pinned !== undefined) value = pinned;
+    else if (statement.kind === 'drawn') {
+      const digit = digitOf.get(name) ?? 0;
+      const { levels } = statement;
+      if (levels.kind === 'steps') value = levelValue(levels, digit);
+      else {
+        const choice = levels.choices[digit];
+        value = choice === undefined ? NaN : evaluateTree(choice, scope);
+      }
+    } else if (statement.kind === 'scatter') {
+      const deviation = evaluateTree(statement.deviation, scope);
+      const size = typeof deviation === 'number' ? deviation : NaN;
+      const seed = seedOfName(name);
+      value =
+        statement.length === 0
+          ? size * gaussian(seed, draw, 0)
+          : Array.from({ length: statement.length }, (_, index) => size * gaussian(seed, draw, index));
+    } else {
+      value = evaluateTree(statement.tree, scope);
+      if (statement.kind === 'given')
+        value = roundPlain(value, (x) => roundInUnit(x, statement.figures, statement.unit));
+    }
+    const figures = pinned === undefined ? options.roundIntermediates?.get(name) : undefined;
+    if (figures !== undefined) {
+      const unit = roundingUnit(script, name);
+      value = roundPlain(value, (x) => roundInUnit(x, figures, unit));
+    }
+    values.set(name, value);
+    if (!isDefined(value)) discardedBy ??= statement.span;
+  }
+  return { draw, values: Object.fromEntries(values), kept, discardedBy };
+}
+
+function roundPlain(value: PlainValue, round: (x: number) => number): PlainValue {
+  return typeof value === 'number' ? round(value) : value.map(round);
+}
+
+const programs = new WeakMap<CompiledScript, Map<string, ScriptProgram>>();
+/** Programs kept for a script; beyond it all are built afresh. */
+const MOST_PROGRAMS = 200;
+
+/** Programs are kept by what they depend on, since an assay runs the same ones over many blocks. */
+function programFor(script: CompiledScript, options: EvaluationOptions): ScriptProgram {
+  const { constants = 'full' } = options;
+  const key = JSON.stringify([
+    options.wanted ?? null,
+    options.conditions !== false,
+    [...(options.roundIntermediates ?? [])],
+    typeof constants === 'string' ? constants : [...constants],
+    [...(options.pinned?.keys() ?? [])],
+  ]);
+  let kept = programs.get(script);
+  if (kept === undefined || kept.size >= MOST_PROGRAMS) {
+    kept = new Map();
+    programs.set(script, kept);
+  }
+  let program = kept.get(key);
+  if (program === undefined) {
+    program = buildScriptProgram(script, options);
+    kept.set(key, program);
+  }
+  return program;
+}
+
+function copyRegister(out: Float64Array, register: Register, offset: number, count: number): void {
+  if (typeof register === 'number') out.fill(register, offset, offset + count);
+  else out.set(count === BLOCK_LENGTH ? register.column : register.column.subarray(0, count), offset);
+}
+
+/** The numbers of the draws selected; throws RangeError when one lies outside the grid. */
+function drawNumbers(script: CompiledScript, draws: DrawSelection): Float64Array {
+  if (draws instanceof Float64Array) {
+    for (const draw of draws) requireDraw(script, draw);
+    return draws;
+  }
+  if (draws.count > 0) {
+    requireDraw(script, draws.from);
+    requireDraw(script, draws.from + draws.count - 1);
+  }
+  const numbers = new Float64Array(draws.count);
+  for (let index = 0; index < draws.count; index += 1) numbers[index] = draws.from + index;
+  return numbers;
 }
 
 /** Many draws by the compiled evaluator. Draws are numbered from 1; throws RangeError outside the grid. */
@@ -21,7 +138,47 @@ export function evaluateBlock(
   draws: DrawSelection,
   options: EvaluationOptions = {},
 ): BlockValues {
-  throw new Error(
-    `no evaluator yet: ${script.source.length} ${String(draws)} ${Object.keys(options).length}`,
-  );
+  const length = selectionLength(draws);
+  const numbers = drawNumbers(script, draws);
+  for (const [name, column] of options.pinned ?? []) {
+    if (column.length !== length)
+      throw new RangeError(`The column pinned on ${name} has ${column.length} values for ${length} draws.`);
+  }
+  const program = programFor(script, options);
+  const columns = new Map<string, Float64Array>();
+  const series = new Map<string, Float64Array[]>();
+  const outputs: { out: Float64Array; register: Register }[] = [];
+  const output = (register: Register): Float64Array => {
+    const out = new Float64Array(length);
+    outputs.push({ out, register });
+    return out;
+  };
+  for (const [name, value] of program.results) {
+    if (isSeries(value)) series.set(name, value.map(output));
+    else columns.set(name, output(value));
+  }
+  const kept = new Uint8Array(length).fill(1);
+  const { state } = program;
+  state.pinned = options.pinned ?? new Map();
+  for (let offset = 0; offset < length; offset += BLOCK_LENGTH) {
+    const count = Math.min(BLOCK_LENGTH, length - offset);
+    state.offset = offset;
+    state.count = count;
+    state.from = draws instanceof Float64Array ? null : draws.from + offset;
+    state.numbers.set(numbers.subarray(offset, offset + count));
+    for (const step of program.steps) step(count);
+    for (const { out, register } of outputs) copyRegister(out, register, offset, count);
+    for (const condition of program.conditions) keepWhere(kept, condition, offset, count);
+  }
+  state.pinned = new Map();
+  return { draws: numbers, columns, series, kept };
+}
+
+function keepWhere(kept: Uint8Array, condition: Register, offset: number, count: number): void {
+  if (typeof condition === 'number') {
+    if (condition !== 1) kept.fill(0, offset, offset + count);
+    return;
+  }
+  const { column } = condition;
+  for (let index = 0; index < count; index += 1) if (column[index] !== 1) kept[offset + index] = 0;
 }

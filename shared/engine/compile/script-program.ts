@@ -1,0 +1,170 @@
+import { coherentUnit } from '../units/quantity-kinds.ts';
+import { readUnit } from '../units/read-unit.ts';
+import type { Unit } from '../units/unit.ts';
+import type { Statement } from '../script/statement.ts';
+import { usesOf } from '../script/check-statement.ts';
+import type { CompiledScript, EvaluationOptions } from './compiled-script.ts';
+import { constantValue } from './constant-precision.ts';
+import { fillDrawn, levelReader, type BlockDraws, type LevelReader } from './draw-columns.ts';
+import { gridPlaces } from './grid.ts';
+import { evaluateTree } from './plain-evaluate.ts';
+import {
+  BLOCK_LENGTH,
+  isSeries,
+  ProgramBuilder,
+  type Register,
+  type RegisterValue,
+  type Step,
+} from './program.ts';
+import { gaussian, seedOfName } from './scatter.ts';
+
+/** What the steps of a program see of the block they work on. */
+export interface BlockState extends BlockDraws {
+  /** Place of the block's first draw in the whole selection. */
+  offset: number;
+  pinned: ReadonlyMap<string, Float64Array>;
+}
+
+/** A script's program for certain wanted names and options. */
+export interface ScriptProgram {
+  state: BlockState;
+  steps: readonly Step[];
+  /** Where each wanted name stands after the steps. */
+  results: ReadonlyMap<string, RegisterValue>;
+  conditions: readonly Register[];
+}
+
+type NamedStatement = Exclude<Statement, { kind: 'require' }>;
+
+/** Unit in which a name is rounded: that of its script, or the coherent one. */
+export function roundingUnit(script: CompiledScript, name: string): Unit {
+  const quantity = script.quantities.find((candidate) => candidate.name === name);
+  const reading = readUnit(quantity?.scriptUnit ?? '');
+  return reading.ok ? reading.unit : coherentUnit(quantity?.dimension ?? []);
+}
+
+/** Names that must be worked out for `wanted`, transitively; pinned names rest on nothing. */
+function neededNames(
+  byName: ReadonlyMap<string, NamedStatement>,
+  wanted: Iterable<string>,
+  pinned: ReadonlySet<string>,
+): Set<string> {
+  const needed = new Set<string>();
+  const open = [...wanted];
+  for (let name = open.pop(); name !== undefined; name = open.pop()) {
+    if (needed.has(name)) continue;
+    needed.add(name);
+    const statement = byName.get(name);
+    if (statement !== undefined && !pinned.has(name)) open.push(...usesOf(statement).names);
+  }
+  return needed;
+}
+
+/** Builds the program. Throws RangeError for a wanted name that the script does not have. */
+export function buildScriptProgram(script: CompiledScript, options: EvaluationOptions): ScriptProgram {
+  const byName = new Map<string, NamedStatement>();
+  for (const statement of script.statements)
+    if (statement.kind !== 'require') byName.set(statement.name, statement);
+  const wanted = options.wanted ?? [...byName.keys()];
+  const unknown = wanted.find((name) => !byName.has(name));
+  if (unknown !== undefined) throw new RangeError(`The script has no name ${unknown}.`);
+  const requires =
+    options.conditions === false ? [] : script.statements.filter((statement) => statement.kind === 'require');
+  const pinned = new Set(options.pinned?.keys());
+  const roots = [...wanted, ...requires.flatMap((statement) => usesOf(statement).names)];
+  const needed = neededNames(byName, roots, pinned);
+
+  const state: BlockState = {
+    from: null,
+    numbers: new Float64Array(BLOCK_LENGTH),
+    count: 0,
+    offset: 0,
+    pinned: new Map(),
+  };
+  const builder = new ProgramBuilder();
+  const registers = new Map<string, RegisterValue>();
+  const scope = {
+    name: (name: string): RegisterValue => registers.get(name) ?? NaN,
+    constant: (name: string): number => constantValue(name, options.constants),
+  };
+  for (const statement of byName.values()) {
+    if (!needed.has(statement.name)) continue;
+    const value = pinned.has(statement.name)
+      ? pinnedColumn(builder, state, statement.name)
+      : statementValue(builder, state, script, statement, scope);
+    const figures = pinned.has(statement.name) ? undefined : options.roundIntermediates?.get(statement.name);
+    const rounded =
+      figures === undefined ? value : builder.round(value, figures, roundingUnit(script, statement.name));
+    registers.set(
+      statement.name,
+      isSeries(rounded) ? rounded.map((register) => builder.keep(register)) : builder.keep(rounded),
+    );
+  }
+  const conditions = requires.map((statement) => {
+    const value = builder.compile(statement.tree, scope);
+    return isSeries(value) ? NaN : builder.keep(value);
+  });
+  const results = new Map(wanted.map((name) => [name, registers.get(name) ?? NaN]));
+  return { state, steps: builder.steps, results, conditions };
+}
+
+function pinnedColumn(builder: ProgramBuilder, state: BlockState, name: string): Register {
+  const column = new Float64Array(BLOCK_LENGTH);
+  builder.steps.push((count) => {
+    const source = state.pinned.get(name);
+    if (source !== undefined) column.set(source.subarray(state.offset, state.offset + count));
+  });
+  return { column, borrowed: true };
+}
+
+function statementValue(
+  builder: ProgramBuilder,
+  state: BlockState,
+  script: CompiledScript,
+  statement: NamedStatement,
+  scope: { name: (name: string) => RegisterValue; constant: (name: string) => number },
+): RegisterValue {
+  switch (statement.kind) {
+    case 'computed':
+      return builder.compile(statement.tree, scope);
+    case 'given':
+      return builder.round(builder.compile(statement.tree, scope), statement.figures, statement.unit);
+    case 'drawn': {
+      const place = gridPlaces(script).find((candidate) => candidate.name === statement.name);
+      const column = new Float64Array(BLOCK_LENGTH);
+      const { levels } = statement;
+      let level: LevelReader;
+      if (levels.kind === 'steps') level = levelReader(levels);
+      else {
+        const values = levels.choices.map((tree) =>
+          evaluateTree(tree, { name: () => NaN, constant: scope.constant }),
+        );
+        level = (digit) => {
+          const value = values[digit];
+          return typeof value === 'number' ? value : NaN;
+        };
+      }
+      if (place !== undefined)
+        builder.steps.push(() => fillDrawn(column, state, place, script.grid.size, level));
+      return { column, borrowed: true };
+    }
+    case 'scatter': {
+      const deviation = builder.compile(statement.deviation, scope);
+      const spread = isSeries(deviation) ? NaN : builder.keep(deviation);
+      const seed = seedOfName(statement.name);
+      const element = (index: number): Register => {
+        const column = new Float64Array(BLOCK_LENGTH);
+        builder.steps.push((count) => {
+          for (let i = 0; i < count; i += 1) {
+            const size = typeof spread === 'number' ? spread : (spread.column[i] ?? NaN);
+            column[i] = size * gaussian(seed, state.numbers[i] ?? NaN, index);
+          }
+        });
+        return { column, borrowed: true };
+      };
+      return statement.length === 0
+        ? element(0)
+        : Array.from({ length: statement.length }, (_, index) => element(index));
+    }
+  }
+}
