@@ -40,14 +40,8 @@ export {
 export { workingOf } from './compile/working.ts';
 export { expressionText } from './script/expression-text.ts';
 export { dependenciesOf, type Dependencies } from './compile/dependencies.ts';
-export {
-  coverageStatement,
-  EXHAUSTIVE_LIMIT,
-  firstKeptDraw,
-  planDraws,
-  randomDraw,
-  type DrawPlan,
-} from './draws/sampling.ts';
+export { coverageStatement } from './draws/coverage.ts';
+export { EXHAUSTIVE_LIMIT, firstKeptDraw, planDraws, randomDraw, type DrawPlan } from './draws/sampling.ts';
 export { readResponse, type ResponseReading } from './responses/read-response.ts';
 export {
   markResponse,
