@@ -4,7 +4,7 @@ import type { z } from 'zod';
 import type { Endpoint } from '#shared/contracts/endpoint.ts';
 import type { Action } from '#shared/domain/permissions.ts';
 
-import type { FileReply } from './file-reply.ts';
+import { FileReply } from './file-reply.ts';
 import { parseInput } from './parse-input.ts';
 import type { SignedIn } from './signed-in.ts';
 
@@ -76,7 +76,8 @@ export function route<
       const input = parseInput(contract, surroundings.request);
       // The guard has seen to it that a caller is there wherever the type says so.
       const actor = surroundings.actor as CallerOf<Can>;
-      return handler({ ...surroundings, ...input, actor });
+      const reply = await handler({ ...surroundings, ...input, actor });
+      return reply instanceof FileReply ? reply : contract.response.parse(reply);
     },
   };
 }

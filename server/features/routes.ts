@@ -1,0 +1,19 @@
+import type { AppContext } from '../context.ts';
+import type { Authentication } from '../http/authentication.ts';
+import type { Route } from '../http/route.ts';
+import { deskRoutes } from './desk/routes.ts';
+import { peopleRoutes } from './people/routes.ts';
+import { recordRoutes } from './records/routes.ts';
+import { sessionRoutes } from './session/routes.ts';
+import { topicRoutes } from './topics/routes.ts';
+
+/** Every route that reads the session; a new feature adds its own here. */
+export function sessionedRoutes(context: AppContext, authentication: Authentication): Route[] {
+  return [
+    ...sessionRoutes(context, authentication),
+    ...deskRoutes(context),
+    ...peopleRoutes(context),
+    ...recordRoutes(context),
+    ...topicRoutes(context),
+  ];
+}
