@@ -13,24 +13,24 @@ export const oilDropItems: DemoItem[] = [
     figures: [chamberFigure],
     content: {
       title: 'A drop held still',
-      stem: 'A negatively charged drop of oil hangs at rest between two horizontal plates that are {{d}} apart. The p.d. between the plates is then {{V}}. The drop is a sphere of radius {{a}}, and the density of the oil is {{rho}}. The upthrust of the air can be left out.',
+      stem: 'A negatively charged drop of oil hangs at rest between two horizontal plates that are {{d}} apart. The p.d. between the plates is then {{Vb}}. The drop is a sphere of radius {{a}}, and the density of the oil is {{rho}}. The upthrust of the air can be left out.',
       script: `// drop in balance between horizontal plates
 n = whole(2, 6)
 a = draw(0.70 um, 1.00 um, 0.02 um)
 rho = draw(860 kg/m^3, 920 kg/m^3, 10 kg/m^3)
 d = draw(5.0 mm, 8.0 mm, 0.5 mm)
-m = 4 / 3 * pi * a^3 * rho
-V = given(m * g * d / (n * e), 3)
-require(V > 100 V)
-require(V < 700 V)
-q = m * g * d / V
+M = 4 / 3 * pi * a^3 * rho
+Vb = given(M * g * d / (n * e), 3)
+require(Vb > 100 V)
+require(Vb < 700 V)
+q = M * g * d / Vb
 N = round(q / e)`,
       quantities: [
         { name: 'a', symbol: 'a', unit: 'µm', role: 'dropRadius' },
         { name: 'rho', symbol: '\\rho', unit: 'kg m^-3', role: 'dropDensity' },
         { name: 'd', symbol: 'd', unit: 'mm', role: 'plateSeparation' },
-        { name: 'V', symbol: 'V', unit: 'V', figures: 3, role: 'balancePd' },
-        { name: 'm', symbol: 'm', unit: 'kg', figures: 3, role: 'dropMass' },
+        { name: 'Vb', symbol: 'V', unit: 'V', figures: 3, role: 'balancePd' },
+        { name: 'M', symbol: 'm', unit: 'kg', figures: 3, role: 'dropMass' },
         { name: 'q', symbol: 'q', unit: 'C', figures: 3, role: 'charge' },
         { name: 'N', symbol: 'n', unit: '', figures: 1, role: 'chargeNumber' },
       ],
@@ -39,14 +39,14 @@ N = round(q / e)`,
         {
           id: 'mass',
           kind: 'showThat',
-          text: 'Show that the mass of the drop is about {{m, 2 sf}}.',
+          text: 'Show that the mass of the drop is about {{M, 2 sf}}.',
           marks: 2,
           statedFigures: 2,
           scheme: [
             { text: '$m = \\frac{4}{3} \\pi a^3 \\rho$ used', marks: 1 },
             { text: 'Value to at least three figures', marks: 1 },
           ],
-          answer: { quantity: 'm', unit: 'kg', figures: 3, band: { kind: 'percent', percent: 1.5 } },
+          answer: { quantity: 'M', unit: 'kg', figures: 3, band: { kind: 'percent', percent: 1.5 } },
         },
         {
           id: 'charge',
@@ -67,7 +67,7 @@ N = round(q / e)`,
               {
                 id: 'noWeight',
                 name: 'distance to the middle taken for the separation',
-                expression: 'm * g * d / (2 * V)',
+                expression: 'M * g * d / (2 * Vb)',
                 guidance: 'Two marks for the balance of forces and the substitution.',
                 marks: 2,
               },

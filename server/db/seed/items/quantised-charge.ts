@@ -16,7 +16,7 @@ V2 = given(W * d / ((n + k) * e), 3)
 require(V2 > 50 V)
 q1 = W * d / V1
 q2 = W * d / V2
-N = round((q2 - q1) / e)`,
+gained = round((q2 - q1) / e)`,
       quantities: [
         { name: 'W', symbol: 'W', unit: 'N', figures: 3, role: 'weight' },
         { name: 'd', symbol: 'd', unit: 'mm', role: 'plateSeparation' },
@@ -24,7 +24,7 @@ N = round((q2 - q1) / e)`,
         { name: 'V2', symbol: 'V_2', unit: 'V', figures: 3, role: 'balancePd', set: 'after' },
         { name: 'q1', symbol: 'q_1', unit: 'C', figures: 3, role: 'charge', set: 'before' },
         { name: 'q2', symbol: 'q_2', unit: 'C', figures: 3, role: 'charge', set: 'after' },
-        { name: 'N', symbol: 'N', unit: '', figures: 1, role: 'chargeNumber', set: 'gained' },
+        { name: 'gained', symbol: 'N', unit: '', figures: 1, role: 'chargeNumber', set: 'gained' },
       ],
       assumptions: ['uniformField', 'noUpthrust'],
       parts: [
@@ -50,7 +50,7 @@ N = round((q2 - q1) / e)`,
             { text: 'Whole number', marks: 1 },
           ],
           answer: {
-            quantity: 'N',
+            quantity: 'gained',
             unit: '',
             figures: 1,
             band: { kind: 'absolute', plusMinus: 0, unit: '' },
