@@ -18,6 +18,15 @@ function assignedNames(statements: readonly Token[][]): Set<string> {
   return names;
 }
 
+const UNREAD: ReturnType<typeof parseStatement> = { statement: null, diagnostics: [] };
+
+/** Whether one of the mistakes lies on the lines of a statement. */
+function holdsAny(tokens: readonly Token[], mistakes: readonly Diagnostic[]): boolean {
+  const from = tokens[0]?.span.line ?? 0;
+  const to = tokens.at(-1)?.span.line ?? 0;
+  return mistakes.some((mistake) => mistake.span.line >= from && mistake.span.line <= to);
+}
+
 function quantityOf(
   statement: Exclude<Statement, { kind: 'require' }>,
   checked: CheckedStatement,
@@ -98,7 +107,8 @@ export function compileScript(source: string): Compilation {
   const quantities: QuantityInfo[] = [];
 
   for (const tokens of split.statements.slice(0, SCRIPT_LIMITS.statements)) {
-    const parsed = parseStatement(tokens, all);
+    // One mistake is told once: a statement with a sign that has no meaning is not read any further.
+    const parsed = holdsAny(tokens, lexed.diagnostics) ? UNREAD : parseStatement(tokens, all);
     diagnostics.push(...parsed.diagnostics);
     const name = tokens[1]?.kind === 'assign' ? (tokens[0]?.text ?? null) : null;
     const earlier = name === null ? undefined : quantities.find((quantity) => quantity.name === name);

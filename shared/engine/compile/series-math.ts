@@ -40,32 +40,45 @@ function agreement(sizes: readonly number[], frequency: number): number {
 
 /** Agreement of readings that scatter by about a tenth of the quantum: exp(-2 (pi / 10)^2). */
 const LEAST_AGREEMENT = 0.8;
+/** A coarse step may miss the top of a peak by this much. */
+const COARSE_AGREEMENT = 0.7;
 /** Quanta smaller than this part of the smallest value would fit almost any readings. */
 const LARGEST_MULTIPLE_OF_LEAST = 12;
+/** Disagreements within this ratio are not told apart, and the larger quantum is taken. */
+const SAME_DISAGREEMENT = 1.2;
+const NO_DISAGREEMENT = 1e-9;
 
 /**
- * The largest amount of which all values are whole multiples, to within scatter of a tenth of it: the first
- * peak of the cosine quantogram (D. G. Kendall, Phil. Trans. R. Soc. A 276, 231, 1974) at or above that
- * agreement, then refined by least squares on the multiples found. NaN when there is none.
+ * The largest amount of which all values are whole multiples to within their scatter: of the peaks of the cosine
+ * quantogram (D. G. Kendall, Phil. Trans. R. Soc. A 276, 231, 1974), each refined by least squares, the one with
+ * the best agreement, and of equally good ones the largest. NaN when the values scatter by more than a tenth of
+ * any quantum, or one of them is zero.
  */
 export function quantumOf(values: readonly number[]): number {
   const sizes = values.map(Math.abs);
   const least = Math.min(...sizes);
   const greatest = Math.max(...sizes);
-  if (!(least > 0) || !Number.isFinite(greatest)) return NaN;
-  const step = 1 / (20 * greatest);
-  let frequency = 0.8 / least;
-  let previous = agreement(sizes, frequency - step);
-  let here = agreement(sizes, frequency);
+  if (!(least > 0) || !(greatest / least < 1_000)) return NaN;
+  const step = 1 / (10 * greatest);
   const limit = (LARGEST_MULTIPLE_OF_LEAST + 0.5) / least;
-  for (let tries = 0; frequency < limit && tries < 100_000; tries += 1) {
+  const peaks: { quantum: number; disagreement: number }[] = [];
+  let previous = 0;
+  let frequency = 0.8 / least;
+  let here = agreement(sizes, frequency);
+  while (frequency < limit) {
     const next = agreement(sizes, frequency + step);
-    if (here >= LEAST_AGREEMENT && here >= previous && here >= next) return refine(sizes, 1 / frequency);
+    if (here >= COARSE_AGREEMENT && here >= previous && here >= next) {
+      const quantum = refine(sizes, refine(sizes, 1 / frequency));
+      peaks.push({ quantum, disagreement: 1 - agreement(sizes, 1 / quantum) });
+    }
     previous = here;
     here = next;
     frequency += step;
   }
-  return NaN;
+  const best = Math.min(...peaks.map((peak) => peak.disagreement));
+  if (!(best <= 1 - LEAST_AGREEMENT)) return NaN;
+  const good = peaks.filter((peak) => peak.disagreement <= SAME_DISAGREEMENT * best + NO_DISAGREEMENT);
+  return Math.max(...good.map((peak) => peak.quantum));
 }
 
 /** Least squares through the origin of the values against the whole multiples that a quantum gives them. */

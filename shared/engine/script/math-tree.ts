@@ -147,6 +147,20 @@ class TreeReader {
     return sign?.kind === 'operator' && sign.text === '-' ? joinSpans(sign.span, span) : span;
   }
 
+  /** The span from the square bracket that opens before `first` to its partner. */
+  private withSquareBrackets(first: Span, last: Span): Span {
+    const { items, partner } = this.source;
+    let index = items.findIndex((item) => item.span.start === first.start) - 1;
+    for (; index >= 0; index -= 1) {
+      const item = items[index];
+      const close = items[partner.get(index) ?? -1];
+      if (item?.kind === 'open' && item.text === '[' && close !== undefined && close.span.start >= last.end) {
+        return joinSpans(item.span, close.span);
+      }
+    }
+    return joinSpans(first, last);
+  }
+
   private compare(conditionals: readonly string[], params: readonly NodeView[]): ExpressionTree {
     const operands = params.map((param) => this.read(param));
     const operators = conditionals.flatMap((name) => COMPARISONS.get(name) ?? []);
@@ -186,7 +200,7 @@ class TreeReader {
     const last = elements.at(-1);
     if (first === undefined || last === undefined)
       return this.fail(this.whole, 'list-empty', 'A list holds at least one value.');
-    const span = joinSpans(first.span, last.span);
+    const span = this.withSquareBrackets(first.span, last.span);
     if (elements.length > SCRIPT_LIMITS.seriesElements) {
       return this.fail(
         span,
@@ -210,7 +224,8 @@ class TreeReader {
     }
     const tree = this.read(place);
     const index = this.wholeNumber(tree, 1, SCRIPT_LIMITS.seriesElements, 'The place of a value in a series');
-    return { kind: 'element', series, index, span: joinSpans(series.span, tree.span) };
+    const { end } = this.withSquareBrackets(tree.span, tree.span);
+    return { kind: 'element', series, index, span: { ...joinSpans(series.span, tree.span), end } };
   }
 
   private wholeNumber(tree: ExpressionTree, least: number, greatest: number, what: string): number {
