@@ -29,12 +29,18 @@ export function createContext(settings: Settings, overrides: Partial<AppContext>
       : null;
   const database = overrides.database ?? handle?.database;
   if (database === undefined) throw new Error('There is no database.');
-  const engine = overrides.engine ?? createEngine({ threads: settings.engineWorkers });
+  const logger = overrides.logger ?? pino({ level: settings.logLevel });
+  const engine =
+    overrides.engine ??
+    createEngine({
+      threads: settings.engineWorkers,
+      report: (error) => logger.error({ err: error }, 'a thread of the engine broke'),
+    });
   return {
     settings,
     database,
     engine,
-    logger: pino({ level: settings.logLevel }),
+    logger,
     clock: () => new Date(),
     random: () => randomInt(2 ** 32) / 2 ** 32,
     close: async () => {

@@ -4,6 +4,7 @@ import type { DrawView } from '#shared/contracts/checking.ts';
 import type { AssayReport, ItemContent } from '#shared/engine/index.ts';
 
 import { createTaskPool } from './task-pool.ts';
+import { findWorkerFile } from './worker-file.ts';
 import type { FigureSize, MarkedWorking, WorkingToMark } from './tasks.ts';
 
 interface TaskOptions {
@@ -36,16 +37,24 @@ const QUICK = {
   tooLong: 'This draw took longer than 3 seconds and was stopped. Make the script simpler.',
 };
 
+interface EngineOptions {
+  threads: number;
+  /** Told of a thread that broke outside any task. */
+  report: (error: Error) => void;
+}
+
 /** Starts the engine's threads: `threads` for assays (0: one fewer than the processor has) and one for single draws. */
-export function createEngine({ threads }: { threads: number }): Engine {
+export function createEngine({ threads, report }: EngineOptions): Engine {
+  const worker = findWorkerFile('engine-worker', import.meta.url);
   const thorough = createTaskPool({
-    worker: 'engine-worker',
+    worker,
     threads: threads === 0 ? Math.max(1, availableParallelism() - 1) : threads,
     queue: 32,
     memory: 512,
+    report,
   });
   // Single draws have a thread of their own, so that a live sheet never waits behind an assay.
-  const quick = createTaskPool({ worker: 'engine-worker', threads: 1, queue: 64, memory: 256 });
+  const quick = createTaskPool({ worker, threads: 1, queue: 64, memory: 256, report });
   return {
     assay: async (content, options = {}) =>
       (await thorough.run('assay', content, { ...ASSAY, signal: options.signal })) as AssayReport,

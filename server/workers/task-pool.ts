@@ -2,16 +2,18 @@ import { Piscina } from 'piscina';
 
 import { AppError } from '#shared/errors/app-error.ts';
 
-import { findWorkerFile } from './worker-file.ts';
+import type { TaskCall } from './dispatcher.ts';
+import type { WorkerFile } from './worker-file.ts';
 
 export interface PoolOptions {
-  /** Name of the worker file without its ending. */
-  worker: string;
+  worker: WorkerFile;
   threads: number;
   /** Tasks that may wait; one more is refused as busy. */
   queue: number;
   /** Heap of one thread, MB. */
   memory: number;
+  /** Told of a thread that broke outside any task. */
+  report?: (error: Error) => void;
 }
 
 export interface TaskLimits {
@@ -34,11 +36,6 @@ export interface TaskPool {
 function translate(error: unknown, timedOut: boolean, limits: TaskLimits): unknown {
   if (timedOut) return new AppError('timedOut', limits.tooLong, { cause: error });
   if (!(error instanceof Error)) return error;
-  if (error.message === 'Task queue is at limit') {
-    return new AppError('busy', 'Many checks are running at the moment. Try again in a few seconds.', {
-      cause: error,
-    });
-  }
   if ('code' in error && error.code === 'ERR_WORKER_OUT_OF_MEMORY') {
     return new AppError(
       'notPossible',
@@ -56,21 +53,32 @@ function translate(error: unknown, timedOut: boolean, limits: TaskLimits): unkno
  * notPossible (out of memory), with the client's abort reason, or with what the task threw.
  */
 export function createTaskPool(options: PoolOptions): TaskPool {
-  const file = findWorkerFile(options.worker, import.meta.url);
   const pool = new Piscina({
-    filename: file.path,
-    execArgv: file.execArgv,
+    filename: options.worker.path,
+    // Nothing of the parent's own arguments: its loaders are not for threads.
+    execArgv: [],
+    workerData: { source: options.worker.source },
     minThreads: 1,
     maxThreads: options.threads,
     idleTimeout: 60_000,
-    maxQueue: options.queue,
+    // First come, first served; how many may wait is counted below, since the pool's own limit lets more in.
+    stricterFIFO: true,
     resourceLimits: { maxOldGenerationSizeMb: options.memory },
     // Threads see no secrets of the server's environment.
     env: {},
   });
 
+  pool.on('error', (error: Error) => options.report?.(error));
+
+  /** Tasks that run or wait. */
+  let inHand = 0;
+
   async function run(task: string, payload: unknown, limits: TaskLimits): Promise<unknown> {
     limits.signal?.throwIfAborted();
+    if (inHand >= options.threads + options.queue) {
+      throw new AppError('busy', 'Many checks are running at the moment. Try again in a few seconds.');
+    }
+    inHand += 1;
     const stop = new AbortController();
     let timedOut = false;
     const clock = setTimeout(() => {
@@ -79,8 +87,9 @@ export function createTaskPool(options: PoolOptions): TaskPool {
     }, limits.milliseconds);
     let grace: NodeJS.Timeout | undefined;
     let clientLeft: (() => void) | undefined;
-    const work: Promise<unknown> = pool.run(payload, { name: task, signal: stop.signal });
+    const work: Promise<unknown> = pool.run({ task, payload } satisfies TaskCall, { signal: stop.signal });
     const clear = () => {
+      inHand -= 1;
       clearTimeout(clock);
       clearTimeout(grace);
       if (clientLeft !== undefined) limits.signal?.removeEventListener('abort', clientLeft);

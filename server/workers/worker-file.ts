@@ -1,13 +1,19 @@
 import { existsSync } from 'node:fs';
 import { dirname, join } from 'node:path';
-import { fileURLToPath } from 'node:url';
+import { fileURLToPath, pathToFileURL } from 'node:url';
 
 const STEPS_UP = 4;
 
 export interface WorkerFile {
+  /** What the thread runs. */
   path: string;
-  /** What Node needs before it can run the file: tsx for a source file, nothing for a bundled one. */
-  execArgv: string[];
+  /** The TypeScript source that `path` loads, as a URL; null for a bundled worker. */
+  source: string | null;
+}
+
+/** A worker's TypeScript source, run as it stands; `folder` is that of the server's other workers. */
+export function sourceWorker(source: string, folder: string): WorkerFile {
+  return { path: join(folder, 'source-worker.mjs'), source: pathToFileURL(source).href };
 }
 
 /**
@@ -19,9 +25,9 @@ export function findWorkerFile(name: string, moduleUrl: string): WorkerFile {
   for (let step = 0; step < STEPS_UP; step += 1) {
     for (const place of [folder, join(folder, 'workers')]) {
       const bundled = join(place, `${name}.js`);
-      if (existsSync(bundled)) return { path: bundled, execArgv: [] };
+      if (existsSync(bundled)) return { path: bundled, source: null };
       const source = join(place, `${name}.ts`);
-      if (existsSync(source)) return { path: source, execArgv: ['--import', 'tsx'] };
+      if (existsSync(source)) return sourceWorker(source, place);
     }
     folder = dirname(folder);
   }
