@@ -165,17 +165,17 @@ describe('a band that is tried', () => {
 describe('words', () => {
   it('carry a real minus sign, a plus sign and the percent sign', () => {
     expect([0.021, -0.0004, 0, 1.5, -0.30103].map((error) => percentText(error))).toEqual([
-      '+2.1 %',
-      '−0.04 %',
-      '0 %',
-      '+150 %',
-      '−30 %',
+      '+2.1\u202f%',
+      '−0.04\u202f%',
+      '0\u202f%',
+      '+150\u202f%',
+      '−30\u202f%',
     ]);
   });
 
   it('say of a mark what it is, where it stands and whether it would earn the marks', () => {
     expect(describeMark(mark('slip', -0.293, { label: 'half left out', furthest: -0.3, draw: 12 }))).toBe(
-      'Slip: half left out, at its closest −29.3 % from the model answer, at its furthest −30 %; outside the band. Draw 12.',
+      'Slip: half left out, at its closest −29.3\u202f% from the model answer, at its furthest −30\u202f%; outside the band. Draw 12.',
     );
     expect(
       describeScale(scale([mark('nearMiss', 0.01, { insideBand: true })]), { low: -0.02, high: 0.02 }),

@@ -20,12 +20,7 @@ export function percentText(error: number, figures = 2): string {
   if (!Number.isFinite(error)) return 'without limit';
   const percent = error * 100;
   const text = plain(percent, Math.abs(percent) >= 100 ? 3 : figures);
-  return `${percent > 0 && text !== '0' ? '+' : ''}${text} %`;
-}
-
-/** A value of the answer with its unit, three or four figures. */
-export function answerText(value: number, unit: string): string {
-  return unit === '' ? plain(value, 4) : `${plain(value, 4)} ${unit}`;
+  return `${percent > 0 && text !== '0' ? '+' : ''}${text}\u202f%`;
 }
 
 const KIND: Readonly<Record<StripMark['kind'], string>> = {
