@@ -81,3 +81,13 @@ export {
   type Severity,
   type StripMark,
 } from './assay/report.ts';
+export { findHoles, type Hole, type HoleMistake } from './holes/find-holes.ts';
+export {
+  holeProblem,
+  printingOf,
+  printSeries,
+  printValue,
+  type HoleContext,
+  type HolePrinting,
+} from './holes/fill-hole.ts';
+export { answerBand, type AnswerBand } from './assay/answer-band.ts';

@@ -57,12 +57,15 @@ export function printingOf(
           : `The script has no quantity “${name}”: did you mean “${similar}”?`,
     };
   }
-  if (info.shape.kind === 'condition') return { problem: `“${name}” is a condition and has no value to print.` };
+  if (info.shape.kind === 'condition')
+    return { problem: `“${name}” is a condition and has no value to print.` };
   let element: number | null = null;
   if (index !== undefined) {
     const length = info.shape.kind === 'series' ? info.shape.length : 0;
     if (Number(index) < 1 || Number(index) > length) {
-      return { problem: `“${name}” has no element ${index}: it has ${length === 0 ? 'a single value' : length}.` };
+      return {
+        problem: `“${name}” has no element ${index}: it has ${length === 0 ? 'a single value' : length}.`,
+      };
     }
     element = Number(index) - 1;
   }

@@ -41,7 +41,8 @@ function readInside(inside: string, start: number, end: number): Hole | HoleMist
   }
   if (rest.length > 1) return mistake('Write at most one number of figures, as {{Va, 2 sf}}.');
   const asked = rest[0];
-  if (asked === undefined) return { kind: 'value', names: [name], unit: unit ?? null, figures: null, start, end };
+  if (asked === undefined)
+    return { kind: 'value', names: [name], unit: unit ?? null, figures: null, start, end };
   const figures = FIGURES.exec(asked)?.[1];
   if (figures === undefined || Number(figures) < 1 || Number(figures) > 12) {
     return mistake(`“${asked}” is not a number of figures: write 1 sf to 12 sf.`);
