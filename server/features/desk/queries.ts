@@ -1,4 +1,4 @@
-import { and, asc, count, eq, isNull, ne, notExists, type SQL, sql, sum } from 'drizzle-orm';
+import { and, asc, count, eq, isNull, ne, notExists, type SQL, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/mysql-core';
 
 import type { Connection } from '../../db/client.ts';
@@ -86,22 +86,19 @@ export function selectReviewQueue(connection: Connection, personId: number) {
   );
 }
 
-/** Papers that are being assembled, with their items and marks so far. */
+/** Papers that are being assembled, with how many items they have so far. */
 export function selectAssembling(connection: Connection) {
   return connection
     .select({
       id: papers.id,
       code: papers.code,
       title: papers.title,
-      targetMarks: papers.targetMarks,
       updatedAt: papers.updatedAt,
       places: count(paperPlaces.id),
-      marks: sum(items.marks).mapWith(Number),
       total,
     })
     .from(papers)
     .leftJoin(paperPlaces, eq(paperPlaces.paperId, papers.id))
-    .leftJoin(items, eq(items.id, paperPlaces.itemId))
     .where(eq(papers.state, 'assembling'))
     .groupBy(papers.id)
     .orderBy(asc(papers.updatedAt), asc(papers.id))

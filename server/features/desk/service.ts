@@ -91,7 +91,7 @@ export async function readDesk(context: AppContext, actor: SignedIn): Promise<Gr
         path: `/papers/${row.id}`,
         code: row.code,
         title: row.title,
-        reason: `${row.marks ?? 0} of ${row.targetMarks} marks placed`,
+        reason: row.places === 1 ? '1 item so far' : `${row.places} items so far`,
         since: row.updatedAt.toISOString(),
         dueOn: null,
       })),
