@@ -23,6 +23,7 @@ export {
   type PrintPrecision,
 } from './units/format.ts';
 export { roundToDecimals, roundToFigures } from './units/rounding.ts';
+export { describeDimension } from './units/quantity-kinds.ts';
 export { CONSTANTS, type PhysicalConstant } from './physics/constants.ts';
 export type * from './script/expression-tree.ts';
 export type * from './script/statement.ts';
