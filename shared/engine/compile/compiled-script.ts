@@ -77,6 +77,8 @@ export interface EvaluationOptions {
   constants?: ConstantPrecision;
   /** Columns imposed on names in place of their own statements, SI, one value a draw. */
   pinned?: ReadonlyMap<string, Float64Array>;
+  /** An earlier result of as many draws whose columns are written over, which saves making new ones. */
+  into?: BlockValues;
 }
 
 /** Values of a block of draws; every column is as long as `draws`. */

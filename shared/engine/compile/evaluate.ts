@@ -12,7 +12,7 @@ import { selectionLength } from './draw-columns.ts';
 import { digitsOfDraw, gridPlaces, requireDraw } from './grid.ts';
 import { levelValue } from './levels.ts';
 import { evaluateTree, type PlainValue } from './plain-evaluate.ts';
-import { BLOCK_LENGTH, isSeries, type Register } from './program.ts';
+import { BLOCK_LENGTH, isSeries, type ColumnRegister, type Register } from './program.ts';
 import { gaussian, seedOfName } from './scatter.ts';
 import { buildScriptProgram, roundingUnit, type ScriptProgram } from './script-program.ts';
 
@@ -112,13 +112,17 @@ function programFor(script: CompiledScript, options: EvaluationOptions): ScriptP
   return program;
 }
 
-function copyRegister(out: Float64Array, register: Register, offset: number, count: number): void {
-  if (typeof register === 'number') out.fill(register, offset, offset + count);
-  else out.set(count === BLOCK_LENGTH ? register.column : register.column.subarray(0, count), offset);
+/** A column to write over where it has the right length, else a new one. */
+function reusable(column: Float64Array | undefined, length: number): Float64Array {
+  return column?.length === length ? column : new Float64Array(length);
 }
 
 /** The numbers of the draws selected; throws RangeError when one lies outside the grid. */
-function drawNumbers(script: CompiledScript, draws: DrawSelection): Float64Array {
+function drawNumbers(
+  script: CompiledScript,
+  draws: DrawSelection,
+  into: BlockValues | undefined,
+): Float64Array {
   if (draws instanceof Float64Array) {
     for (const draw of draws) requireDraw(script, draw);
     return draws;
@@ -127,7 +131,7 @@ function drawNumbers(script: CompiledScript, draws: DrawSelection): Float64Array
     requireDraw(script, draws.from);
     requireDraw(script, draws.from + draws.count - 1);
   }
-  const numbers = new Float64Array(draws.count);
+  const numbers = reusable(into?.draws, draws.count);
   for (let index = 0; index < draws.count; index += 1) numbers[index] = draws.from + index;
   return numbers;
 }
@@ -139,7 +143,8 @@ export function evaluateBlock(
   options: EvaluationOptions = {},
 ): BlockValues {
   const length = selectionLength(draws);
-  const numbers = drawNumbers(script, draws);
+  const { into } = options;
+  const numbers = drawNumbers(script, draws, into);
   for (const [name, column] of options.pinned ?? []) {
     if (column.length !== length)
       throw new RangeError(`The column pinned on ${name} has ${column.length} values for ${length} draws.`);
@@ -147,31 +152,62 @@ export function evaluateBlock(
   const program = programFor(script, options);
   const columns = new Map<string, Float64Array>();
   const series = new Map<string, Float64Array[]>();
-  const outputs: { out: Float64Array; register: Register }[] = [];
-  const output = (register: Register): Float64Array => {
-    const out = new Float64Array(length);
-    outputs.push({ out, register });
-    return out;
-  };
+  const outputs = new Outputs();
+  const output = (register: Register, earlier: Float64Array | undefined): Float64Array =>
+    outputs.add(reusable(earlier, length), register);
   for (const [name, value] of program.results) {
-    if (isSeries(value)) series.set(name, value.map(output));
-    else columns.set(name, output(value));
+    if (isSeries(value)) {
+      const earlier = into?.series.get(name);
+      series.set(
+        name,
+        value.map((register, index) => output(register, earlier?.[index])),
+      );
+    } else columns.set(name, output(value, into?.columns.get(name)));
   }
-  const kept = new Uint8Array(length).fill(1);
+  const kept = (into?.kept.length === length ? into.kept : new Uint8Array(length)).fill(1);
   const { state } = program;
-  state.pinned = options.pinned ?? new Map();
+  state.pinned = options.pinned ?? NOTHING_PINNED;
   for (let offset = 0; offset < length; offset += BLOCK_LENGTH) {
     const count = Math.min(BLOCK_LENGTH, length - offset);
     state.offset = offset;
     state.count = count;
     state.from = draws instanceof Float64Array ? null : draws.from + offset;
-    state.numbers.set(numbers.subarray(offset, offset + count));
+    state.numbers = numbers.subarray(offset, offset + count);
+    outputs.aim(offset, count);
     for (const step of program.steps) step(count);
-    for (const { out, register } of outputs) copyRegister(out, register, offset, count);
     for (const condition of program.conditions) keepWhere(kept, condition, offset, count);
   }
-  state.pinned = new Map();
+  outputs.finish();
+  state.pinned = NOTHING_PINNED;
+  state.numbers = new Float64Array(0);
   return { draws: numbers, columns, series, kept };
+}
+
+const NOTHING_PINNED: ReadonlyMap<string, Float64Array> = new Map();
+
+/** The caller's columns. Registers are aimed at them block by block, so that results need no copying. */
+class Outputs {
+  private readonly aimed = new Map<ColumnRegister, { out: Float64Array; home: Float64Array }>();
+  private readonly copies: { out: Float64Array; from: Float64Array }[] = [];
+
+  /** Ties a register to a column; a second name of the same register gets a copy in the end. */
+  add(out: Float64Array, register: Register): Float64Array {
+    if (typeof register === 'number') return out.fill(register);
+    const first = this.aimed.get(register);
+    if (first === undefined) this.aimed.set(register, { out, home: register.column });
+    else this.copies.push({ out, from: first.out });
+    return out;
+  }
+
+  aim(offset: number, count: number): void {
+    for (const [register, { out }] of this.aimed) register.column = out.subarray(offset, offset + count);
+  }
+
+  /** Gives the registers their own columns back. */
+  finish(): void {
+    for (const [register, { home }] of this.aimed) register.column = home;
+    for (const { out, from } of this.copies) out.set(from);
+  }
 }
 
 function keepWhere(kept: Uint8Array, condition: Register, offset: number, count: number): void {

@@ -124,9 +124,9 @@ export function evaluateExpression(
   const loaded = new Map<string, RegisterValue>();
   let offset = 0;
   const load = (source: Float64Array): Register => {
-    const column = new Float64Array(BLOCK_LENGTH);
-    builder.steps.push((count) => column.set(source.subarray(offset, offset + count)));
-    return { column, borrowed: true };
+    const register = builder.named();
+    builder.steps.push((count) => register.column.set(source.subarray(offset, offset + count)));
+    return register;
   };
   for (const name of expression.uses) {
     const column = values.columns.get(name);

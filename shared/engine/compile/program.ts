@@ -18,8 +18,17 @@ import { interceptOf, meanOf, quantumOf, slopeOf, sumOf } from './series-math.ts
 /** Draws that are worked on at a time: a block's columns stay in the processor's cache. */
 export const BLOCK_LENGTH = 1024;
 
-/** One value for all draws, or a column of a block; `borrowed` columns belong to a name and are never written over. */
-export type Register = number | { column: Float64Array; borrowed: boolean };
+/**
+ * A column of a block. A kept one belongs to a name and is never written over; steps read `column` anew each
+ * time, so that a result can be made to land straight in the caller's own column.
+ */
+export interface ColumnRegister {
+  column: Float64Array;
+  kept: boolean;
+}
+
+/** One value for all draws, or a column of a block. */
+export type Register = number | ColumnRegister;
 export type RegisterValue = Register | readonly Register[];
 
 /** What the names of a tree stand for while it is compiled. */
@@ -28,69 +37,64 @@ export interface RegisterScope {
   constant(name: string): number;
 }
 
+type ColumnLoop = (out: Float64Array, a: Float64Array, count: number) => void;
+
 /** One step of a program: works on the first `count` draws of the block. */
 export type Step = (count: number) => void;
 
 /** Compiles checked trees to steps over blocks of draws; parts that are the same for all draws are worked out at once. */
 export class ProgramBuilder {
   readonly steps: Step[] = [];
-  private readonly free: Float64Array[] = [];
+  private readonly free: ColumnRegister[] = [];
 
-  /** A column to write into, taken back from an operand that is needed no more where there is one. */
-  private target(...operands: readonly Register[]): Float64Array {
-    for (const operand of operands) {
-      if (typeof operand === 'object' && !operand.borrowed) return operand.column;
-    }
-    return this.free.pop() ?? new Float64Array(BLOCK_LENGTH);
+  /** A column that belongs to a name from the start. */
+  named(): ColumnRegister {
+    return { column: new Float64Array(BLOCK_LENGTH), kept: true };
+  }
+
+  /** A column to write into, taken from an operand that is needed no more where there is one. */
+  private target(...operands: readonly Register[]): ColumnRegister {
+    for (const operand of operands) if (typeof operand === 'object' && !operand.kept) return operand;
+    return this.free.pop() ?? { column: new Float64Array(BLOCK_LENGTH), kept: false };
   }
 
   /** Gives back the columns of operands that are needed no more, except the one that now holds the result. */
-  private release(result: Float64Array, ...operands: readonly Register[]): void {
+  private release(result: ColumnRegister, ...operands: readonly Register[]): void {
     for (const operand of operands) {
-      if (typeof operand === 'object' && !operand.borrowed && operand.column !== result)
-        this.free.push(operand.column);
+      if (typeof operand === 'object' && !operand.kept && operand !== result) this.free.push(operand);
     }
   }
 
-  /** A register that a name keeps: its column is never reused. */
+  /** Marks a register as one that is never written over. */
   keep(register: Register): Register {
-    return typeof register === 'number' ? register : { column: register.column, borrowed: true };
+    if (typeof register === 'object') register.kept = true;
+    return register;
   }
 
   private binary(kernels: BinaryKernels, a: Register, b: Register): Register {
-    if (typeof a === 'number' && typeof b === 'number') return kernels.scalars(a, b);
-    const out = this.target(a, b);
     if (typeof a === 'number') {
-      if (typeof b === 'object') {
-        const right = b.column;
-        this.steps.push((count) => kernels.leftScalar(out, a, right, count));
-      }
-    } else if (typeof b === 'number') {
-      const left = a.column;
-      this.steps.push((count) => kernels.rightScalar(out, left, b, count));
-    } else {
-      const left = a.column;
-      const right = b.column;
-      this.steps.push((count) => kernels.columns(out, left, right, count));
+      if (typeof b === 'number') return kernels.scalars(a, b);
+      const out = this.target(b);
+      this.steps.push((count) => kernels.leftScalar(out.column, a, b.column, count));
+      return out;
     }
+    const out = this.target(a, b);
+    if (typeof b === 'number')
+      this.steps.push((count) => kernels.rightScalar(out.column, a.column, b, count));
+    else this.steps.push((count) => kernels.columns(out.column, a.column, b.column, count));
     this.release(out, a, b);
-    return { column: out, borrowed: false };
+    return out;
   }
 
-  private unary(
-    a: Register,
-    work: (x: number) => number,
-    loop?: (out: Float64Array, a: Float64Array, count: number) => void,
-  ): Register {
+  private unary(a: Register, work: (x: number) => number, loop?: ColumnLoop): Register {
     if (typeof a === 'number') return work(a);
     const out = this.target(a);
-    const { column } = a;
     this.steps.push(
       loop === undefined
-        ? (count) => mapColumn(out, column, count, work)
-        : (count) => loop(out, column, count),
+        ? (count) => mapColumn(out.column, a.column, count, work)
+        : (count) => loop(out.column, a.column, count),
     );
-    return { column: out, borrowed: false };
+    return out;
   }
 
   /** Elementwise work on two values of which either may be a series. */
@@ -189,16 +193,21 @@ export class ProgramBuilder {
       const left = this.asColumn(a);
       const right = this.asColumn(b);
       const out = this.target();
-      this.steps.push((count) => selectColumn(out, condition.column, left, right, count));
-      return { column: out, borrowed: false };
+      this.steps.push((count) =>
+        selectColumn(out.column, condition.column, left.column, right.column, count),
+      );
+      return out;
     };
     if (!isSeries(yes) && !isSeries(no)) return select(yes, no);
     const length = isSeries(yes) ? yes.length : isSeries(no) ? no.length : 0;
     return Array.from({ length }, (_, index) => select(elementOf(yes, index), elementOf(no, index)));
   }
 
-  private asColumn(register: Register): Float64Array {
-    return typeof register === 'number' ? new Float64Array(BLOCK_LENGTH).fill(register) : register.column;
+  private asColumn(register: Register): ColumnRegister {
+    if (typeof register === 'object') return register;
+    const filled = this.named();
+    filled.column.fill(register);
+    return filled;
   }
 
   private spread(tree: Extract<ExpressionTree, { kind: 'spread' }>, scope: RegisterScope): RegisterValue {
@@ -252,17 +261,17 @@ export class ProgramBuilder {
   private gather(registers: readonly Register[], work: (numbers: number[]) => number): Register {
     const fixed = registers.map((register) => (typeof register === 'number' ? register : NaN));
     if (registers.every((register) => typeof register === 'number')) return work(fixed);
-    const columns = registers.map((register) => (typeof register === 'number' ? null : register.column));
     const out = this.target();
     const numbers = [...fixed];
     this.steps.push((count) => {
       for (let i = 0; i < count; i += 1) {
-        for (const [index, column] of columns.entries())
-          if (column !== null) numbers[index] = column[i] ?? NaN;
-        out[i] = work(numbers);
+        for (const [index, register] of registers.entries()) {
+          if (typeof register === 'object') numbers[index] = register.column[i] ?? NaN;
+        }
+        out.column[i] = work(numbers);
       }
     });
-    return { column: out, borrowed: false };
+    return out;
   }
 }
 

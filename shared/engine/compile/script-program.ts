@@ -1,21 +1,15 @@
 import { coherentUnit } from '../units/quantity-kinds.ts';
 import { readUnit } from '../units/read-unit.ts';
 import type { Unit } from '../units/unit.ts';
-import type { Statement } from '../script/statement.ts';
+import type { ChoiceLevels, Statement, StepLevels } from '../script/statement.ts';
 import { usesOf } from '../script/check-statement.ts';
 import type { CompiledScript, EvaluationOptions } from './compiled-script.ts';
 import { constantValue } from './constant-precision.ts';
-import { fillDrawn, levelReader, type BlockDraws, type LevelReader } from './draw-columns.ts';
+import { fillDrawn, type BlockDraws } from './draw-columns.ts';
 import { gridPlaces } from './grid.ts';
+import { levelTable, levelValue } from './levels.ts';
 import { evaluateTree } from './plain-evaluate.ts';
-import {
-  BLOCK_LENGTH,
-  isSeries,
-  ProgramBuilder,
-  type Register,
-  type RegisterValue,
-  type Step,
-} from './program.ts';
+import { isSeries, ProgramBuilder, type Register, type RegisterValue, type Step } from './program.ts';
 import { gaussian, seedOfName } from './scatter.ts';
 
 /** What the steps of a program see of the block they work on. */
@@ -76,7 +70,7 @@ export function buildScriptProgram(script: CompiledScript, options: EvaluationOp
 
   const state: BlockState = {
     from: null,
-    numbers: new Float64Array(BLOCK_LENGTH),
+    numbers: new Float64Array(0),
     count: 0,
     offset: 0,
     pinned: new Map(),
@@ -109,12 +103,24 @@ export function buildScriptProgram(script: CompiledScript, options: EvaluationOp
 }
 
 function pinnedColumn(builder: ProgramBuilder, state: BlockState, name: string): Register {
-  const column = new Float64Array(BLOCK_LENGTH);
+  const register = builder.named();
   builder.steps.push((count) => {
     const source = state.pinned.get(name);
-    if (source !== undefined) column.set(source.subarray(state.offset, state.offset + count));
+    if (source !== undefined) register.column.set(source.subarray(state.offset, state.offset + count));
   });
-  return { column, borrowed: true };
+  return register;
+}
+
+/** The levels of a drawn value as a table where that is small, else by the digit. */
+function levelColumn(
+  levels: StepLevels | ChoiceLevels,
+  constant: (name: string) => number,
+): Float64Array | ((digit: number) => number) {
+  if (levels.kind === 'steps') return levelTable(levels) ?? ((digit) => levelValue(levels, digit));
+  return Float64Array.from(levels.choices, (tree) => {
+    const value = evaluateTree(tree, { name: () => NaN, constant });
+    return typeof value === 'number' ? value : NaN;
+  });
 }
 
 function statementValue(
@@ -131,36 +137,26 @@ function statementValue(
       return builder.round(builder.compile(statement.tree, scope), statement.figures, statement.unit);
     case 'drawn': {
       const place = gridPlaces(script).find((candidate) => candidate.name === statement.name);
-      const column = new Float64Array(BLOCK_LENGTH);
-      const { levels } = statement;
-      let level: LevelReader;
-      if (levels.kind === 'steps') level = levelReader(levels);
-      else {
-        const values = levels.choices.map((tree) =>
-          evaluateTree(tree, { name: () => NaN, constant: scope.constant }),
-        );
-        level = (digit) => {
-          const value = values[digit];
-          return typeof value === 'number' ? value : NaN;
-        };
+      const register = builder.named();
+      const levels = levelColumn(statement.levels, scope.constant);
+      if (place !== undefined) {
+        builder.steps.push(() => fillDrawn(register.column, state, place, script.grid.size, levels));
       }
-      if (place !== undefined)
-        builder.steps.push(() => fillDrawn(column, state, place, script.grid.size, level));
-      return { column, borrowed: true };
+      return register;
     }
     case 'scatter': {
       const deviation = builder.compile(statement.deviation, scope);
       const spread = isSeries(deviation) ? NaN : builder.keep(deviation);
       const seed = seedOfName(statement.name);
       const element = (index: number): Register => {
-        const column = new Float64Array(BLOCK_LENGTH);
+        const register = builder.named();
         builder.steps.push((count) => {
           for (let i = 0; i < count; i += 1) {
             const size = typeof spread === 'number' ? spread : (spread.column[i] ?? NaN);
-            column[i] = size * gaussian(seed, state.numbers[i] ?? NaN, index);
+            register.column[i] = size * gaussian(seed, state.numbers[i] ?? NaN, index);
           }
         });
-        return { column, borrowed: true };
+        return register;
       };
       return statement.length === 0
         ? element(0)

@@ -56,6 +56,27 @@ function lineStarts(source: string): number[] {
   return starts;
 }
 
+/** The tokens that one lexeme stands for: none for space and comments, several for a superscript. */
+function tokensOf(groups: Readonly<Record<string, string>>, written: string, span: Span): Token[] {
+  const token = (kind: TokenKind, text: string): Token => ({ kind, text, written, span });
+  if (groups['space'] !== undefined || groups['comment'] !== undefined) return [];
+  if (groups['newline'] !== undefined) return [token('newline', '\n')];
+  if (groups['number'] !== undefined) return [token('number', written.replace('−', '-'))];
+  if (groups['name'] !== undefined) {
+    const text = written.normalize('NFKC');
+    return [token(WORD_OPERATORS.has(text) ? 'operator' : 'name', text)];
+  }
+  if (groups['operator'] !== undefined)
+    return [token('operator', OPERATOR_SPELLINGS.get(written) ?? written)];
+  if (groups['assign'] !== undefined) return [token('assign', '=')];
+  if (groups['open'] !== undefined) return [token('open', written)];
+  if (groups['close'] !== undefined) return [token('close', written)];
+  if (groups['comma'] !== undefined) return [token('comma', ',')];
+  const digits = Array.from(written, (sign) => SUPERSCRIPTS.get(sign) ?? '').join('');
+  const sign = digits.startsWith('-') ? [token('operator', '-')] : [];
+  return [token('operator', '^'), ...sign, token('number', digits.replace('-', ''))];
+}
+
 /** Splits a text into tokens; signs that have no meaning become diagnostics and are left out. */
 export function tokenise(source: string): { tokens: Token[]; diagnostics: Diagnostic[] } {
   const tokens: Token[] = [];
@@ -89,24 +110,7 @@ export function tokenise(source: string): { tokens: Token[]; diagnostics: Diagno
     const written = match[0];
     const span = spanOf(position, position + written.length);
     position += written.length;
-    const push = (kind: TokenKind, text: string): void => {
-      tokens.push({ kind, text, written, span });
-    };
-    if (groups['newline'] !== undefined) push('newline', '\n');
-    else if (groups['number'] !== undefined) push('number', written.replace('−', '-'));
-    else if (groups['superscript'] !== undefined) {
-      push('operator', '^');
-      const digits = Array.from(written, (sign) => SUPERSCRIPTS.get(sign) ?? '').join('');
-      if (digits.startsWith('-')) push('operator', '-');
-      push('number', digits.replace('-', ''));
-    } else if (groups['name'] !== undefined) {
-      const text = written.normalize('NFKC');
-      push(WORD_OPERATORS.has(text) ? 'operator' : 'name', text);
-    } else if (groups['operator'] !== undefined) push('operator', OPERATOR_SPELLINGS.get(written) ?? written);
-    else if (groups['assign'] !== undefined) push('assign', '=');
-    else if (groups['open'] !== undefined) push('open', written);
-    else if (groups['close'] !== undefined) push('close', written);
-    else if (groups['comma'] !== undefined) push('comma', ',');
+    tokens.push(...tokensOf(groups, written, span));
   }
   return { tokens, diagnostics };
 }

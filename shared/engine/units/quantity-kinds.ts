@@ -1,19 +1,17 @@
-import { dimension, isDimensionless, sameDimension, type Dimension } from './dimension.ts';
-import { rational } from './dimension.ts';
+import { isDimensionless, rational, type Dimension } from './dimension.ts';
 import { readUnit } from './read-unit.ts';
 import { NO_UNIT, unitFromTerms, type Unit, type UnitTerm } from './unit.ts';
 
 /** What a dimension most often measures in electron and quantum physics, and the unit it is written in. */
 interface QuantityKindRow {
   kind: string;
-  unit: string;
-  dimension: Dimension;
+  unit: Unit;
 }
 
 function row(kind: string, unit: string): QuantityKindRow {
   const reading = readUnit(unit);
   if (!reading.ok) throw new RangeError(reading.message);
-  return { kind, unit, dimension: reading.unit.dimension };
+  return { kind, unit: reading.unit };
 }
 
 const ROWS: readonly QuantityKindRow[] = [
@@ -64,8 +62,13 @@ const ROWS: readonly QuantityKindRow[] = [
   row('gradient of p.d. against frequency', 'V s'),
 ];
 
+/** A text that two dimensions share only when they are the same. */
+function keyOf(of: Dimension): string {
+  return of.join(' ');
+}
+
 const KIND_OF_UNIT: ReadonlyMap<string, QuantityKindRow> = new Map(
-  ROWS.map((entry) => [JSON.stringify(entry.dimension), entry]).reverse() as [string, QuantityKindRow][],
+  ROWS.map((entry) => [keyOf(entry.unit.dimension), entry]).reverse() as [string, QuantityKindRow][],
 );
 
 const BASE_SYMBOLS: readonly UnitTerm[] = [
@@ -81,11 +84,8 @@ const BASE_SYMBOLS: readonly UnitTerm[] = [
 /** The coherent SI unit in which a dimension is usually written: named where it has a name, else base units. */
 export function coherentUnit(of: Dimension): Unit {
   if (isDimensionless(of)) return NO_UNIT;
-  const known = KIND_OF_UNIT.get(JSON.stringify(of));
-  if (known !== undefined) {
-    const reading = readUnit(known.unit);
-    if (reading.ok) return reading.unit;
-  }
+  const known = KIND_OF_UNIT.get(keyOf(of));
+  if (known !== undefined) return known.unit;
   const order = [1, 0, 2, 3, 4, 5, 6];
   return unitFromTerms(
     order.flatMap((index) => {
@@ -100,7 +100,7 @@ export function coherentUnit(of: Dimension): Unit {
 
 /** What a dimension measures: a noun such as `potential difference`, or null where it has no common name. */
 export function kindOfDimension(of: Dimension): string | null {
-  return KIND_OF_UNIT.get(JSON.stringify(of))?.kind ?? null;
+  return KIND_OF_UNIT.get(keyOf(of))?.kind ?? null;
 }
 
 const VOWEL = /^[aeiou]/;
@@ -110,7 +110,7 @@ const VOWEL = /^[aeiou]/;
  * `a plain number`, `a quantity in kg m^2 s^-1`.
  */
 export function describeDimension(of: Dimension, unit: string = coherentUnit(of).text): string {
-  if (sameDimension(of, dimension())) return 'a plain number';
+  if (isDimensionless(of)) return 'a plain number';
   const kind = kindOfDimension(of);
   if (kind === null) return `a quantity in ${unit}`;
   return `${VOWEL.test(kind) ? 'an' : 'a'} ${kind} (${unit})`;

@@ -44,8 +44,8 @@ export function roundToFigures(x: number, figures: number): number {
 }
 
 /**
- * Rounds the first `count` values of a column to significant figures, in place or into another column. Values
- * of one quantity mostly share their decimal exponent, so the last one found is tried first.
+ * Rounds the first `count` values of a column to significant figures, in place or into another column, value
+ * for value as roundToFigures does. Values of one quantity mostly share their decade, so its scale is kept.
  */
 export function roundColumnToFigures(
   out: Float64Array,
@@ -53,24 +53,47 @@ export function roundColumnToFigures(
   count: number,
   figures: number,
 ): void {
+  const doubt = powerOfTen(figures) * DOUBT;
   let exponent = 0;
-  let low = 1;
-  let high = 10;
+  let low = Infinity;
+  let high = Infinity;
+  let shift = 0;
+  let scale = 1;
   for (let index = 0; index < count; index += 1) {
-    const x = column[index] ?? NaN;
+    const x = column[index] as number;
     const magnitude = x < 0 ? -x : x;
     if (!(magnitude >= low && magnitude < high)) {
-      if (!(magnitude >= 1e-300 && magnitude < Infinity)) {
+      exponent = neighbouringExponent(magnitude, exponent);
+      shift = figures - 1 - exponent;
+      if (!(shift >= -22 && shift <= 22 && figures <= FAST_FIGURES)) {
+        low = high = Infinity;
         out[index] = roundToFigures(x, figures);
         continue;
       }
-      exponent = decimalExponent(magnitude);
       low = powerOfTen(exponent);
       high = powerOfTen(exponent + 1);
+      scale = powerOfTen(Math.abs(shift));
     }
-    out[index] =
-      figures > FAST_FIGURES ? Number(x.toPrecision(figures)) : roundKnown(x, magnitude, exponent, figures);
+    const scaled = shift >= 0 ? magnitude * scale : magnitude / scale;
+    const whole = Math.floor(scaled);
+    const rest = scaled - whole - 0.5;
+    if (rest < doubt && rest > -doubt) {
+      out[index] = Number(x.toPrecision(figures));
+      continue;
+    }
+    const rounded = rest > 0 ? whole + 1 : whole;
+    const result = shift >= 0 ? rounded / scale : rounded * scale;
+    out[index] = x < 0 ? -result : result;
   }
+}
+
+/** The decimal exponent of a magnitude that is probably near `guess`; NaN for what is not an everyday number. */
+function neighbouringExponent(magnitude: number, guess: number): number {
+  if (!(magnitude >= 1e-300 && magnitude < Infinity)) return NaN;
+  if (magnitude >= powerOfTen(guess) && magnitude < powerOfTen(guess + 1)) return guess;
+  if (magnitude >= powerOfTen(guess + 1) && magnitude < powerOfTen(guess + 2)) return guess + 1;
+  if (magnitude >= powerOfTen(guess - 1) && magnitude < powerOfTen(guess)) return guess - 1;
+  return decimalExponent(magnitude);
 }
 
 /** `x` (coherent SI) rounded to significant figures in `unit`, back in SI. A decimal unit rounds as SI does. */
