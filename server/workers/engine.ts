@@ -2,10 +2,11 @@ import { availableParallelism } from 'node:os';
 
 import type { DrawView } from '#shared/contracts/checking.ts';
 import type { AssayReport, ItemContent } from '#shared/engine/index.ts';
+import type { StoredFigure } from '#shared/sheet/build-item.ts';
 
-import { createTaskPool } from './task-pool.ts';
+import { createTaskPool, type TaskLimits, type TaskPool } from './task-pool.ts';
+import type { BuiltPaper, ChosenDraw, MarkedWorking, PaperToBuild, WorkingToMark } from './task-types.ts';
 import { findWorkerFile } from './worker-file.ts';
-import type { FigureSize, MarkedWorking, WorkingToMark } from './tasks.ts';
 
 interface TaskOptions {
   /** Gives the work up when the client has gone. */
@@ -20,17 +21,25 @@ export interface Engine {
   viewDraw: (
     content: ItemContent,
     draw: number | null,
-    figures?: readonly FigureSize[],
+    figures?: readonly StoredFigure[],
     options?: TaskOptions,
   ) => Promise<DrawView>;
   /** Compares a reviewer's answer with the script's; at most 3 s. */
   markWorking: (working: WorkingToMark, options?: TaskOptions) => Promise<MarkedWorking>;
+  /** A draw by chance that every `require` keeps, null when there is none; `chance` lies in [0, 1). At most 3 s. */
+  chooseDraw: (content: ItemContent, chance: number, options?: TaskOptions) => Promise<ChosenDraw>;
+  /** Question paper and mark scheme with every item at its draw; at most 20 s. */
+  buildPaper: (paper: PaperToBuild, options?: TaskOptions) => Promise<BuiltPaper>;
   close: () => Promise<void>;
 }
 
 const ASSAY = {
   milliseconds: 20_000,
   tooLong: 'The assay took longer than 20 seconds and was stopped. Make the script or its grid smaller.',
+};
+const PAPER = {
+  milliseconds: 20_000,
+  tooLong: 'Building the paper took longer than 20 seconds and was stopped. Try again.',
 };
 const QUICK = {
   milliseconds: 3_000,
@@ -55,17 +64,22 @@ export function createEngine({ threads, report }: EngineOptions): Engine {
   });
   // Single draws have a thread of their own, so that a live sheet never waits behind an assay.
   const quick = createTaskPool({ worker, threads: 1, queue: 64, memory: 256, report });
+
+  const ask = async <Result>(
+    pool: TaskPool,
+    task: string,
+    payload: unknown,
+    limits: Omit<TaskLimits, 'signal'>,
+    options: TaskOptions = {},
+  ): Promise<Result> => (await pool.run(task, payload, { ...limits, signal: options.signal })) as Result;
+
   return {
-    assay: async (content, options = {}) =>
-      (await thorough.run('assay', content, { ...ASSAY, signal: options.signal })) as AssayReport,
-    viewDraw: async (content, draw, figures = [], options = {}) =>
-      (await quick.run(
-        'viewDraw',
-        { content, draw, figures },
-        { ...QUICK, signal: options.signal },
-      )) as DrawView,
-    markWorking: async (working, options = {}) =>
-      (await quick.run('markWorking', working, { ...QUICK, signal: options.signal })) as MarkedWorking,
+    assay: (content, options) => ask(thorough, 'assay', content, ASSAY, options),
+    buildPaper: (paper, options) => ask(thorough, 'buildPaper', paper, PAPER, options),
+    viewDraw: (content, draw, figures = [], options) =>
+      ask(quick, 'viewDraw', { content, draw, figures }, QUICK, options),
+    markWorking: (working, options) => ask(quick, 'markWorking', working, QUICK, options),
+    chooseDraw: (content, chance, options) => ask(quick, 'chooseDraw', { content, chance }, QUICK, options),
     close: async () => {
       await Promise.all([thorough.close(), quick.close()]);
     },

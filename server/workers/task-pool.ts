@@ -1,3 +1,5 @@
+import { MessageChannel } from 'node:worker_threads';
+
 import { Piscina } from 'piscina';
 
 import { AppError } from '#shared/errors/app-error.ts';
@@ -17,7 +19,7 @@ export interface PoolOptions {
 }
 
 export interface TaskLimits {
-  /** From handing the task in to its end, ms. */
+  /** From a thread's taking the task up to its end, ms. */
   milliseconds: number;
   /** What a person reads when that is not enough. */
   tooLong: string;
@@ -25,6 +27,8 @@ export interface TaskLimits {
   signal?: AbortSignal | undefined;
 }
 
+/** How long a task may wait for a thread, ms; a thread that starts anew on a loaded machine needs seconds. */
+const PATIENCE = 30_000;
 /** A running task is left to finish for so long after its client has gone: starting a thread anew costs more. */
 const GRACE = 1_500;
 
@@ -33,24 +37,28 @@ export interface TaskPool {
   close: () => Promise<void>;
 }
 
-function translate(error: unknown, timedOut: boolean, limits: TaskLimits): unknown {
-  if (timedOut) return new AppError('timedOut', limits.tooLong, { cause: error });
-  if (!(error instanceof Error)) return error;
-  if ('code' in error && error.code === 'ERR_WORKER_OUT_OF_MEMORY') {
+const busy = (cause?: unknown) =>
+  new AppError('busy', 'Many checks are running at the moment. Try again in a few seconds.', { cause });
+
+/** Why the pool itself gave a task up. */
+type Verdict = 'ranTooLong' | 'waitedTooLong' | null;
+
+function translate(error: unknown, verdict: Verdict, limits: TaskLimits): unknown {
+  if (verdict === 'ranTooLong') return new AppError('timedOut', limits.tooLong, { cause: error });
+  if (verdict === 'waitedTooLong') return busy(error);
+  if (error instanceof Error && 'code' in error && error.code === 'ERR_WORKER_OUT_OF_MEMORY') {
     return new AppError(
       'notPossible',
       'This needs more memory than one check may use. Make the script smaller.',
-      {
-        cause: error,
-      },
+      { cause: error },
     );
   }
   return error;
 }
 
 /**
- * A bounded pool of threads. `run` rejects with AppError timedOut (the thread is ended and replaced), busy or
- * notPossible (out of memory), with the client's abort reason, or with what the task threw.
+ * A bounded pool of threads. `run` rejects with AppError timedOut (the thread is ended and replaced), busy (too
+ * many wait, or none came free) or notPossible (out of memory), with the client's abort reason, or with what the task threw.
  */
 export function createTaskPool(options: PoolOptions): TaskPool {
   const pool = new Piscina({
@@ -75,20 +83,29 @@ export function createTaskPool(options: PoolOptions): TaskPool {
 
   async function run(task: string, payload: unknown, limits: TaskLimits): Promise<unknown> {
     limits.signal?.throwIfAborted();
-    if (inHand >= options.threads + options.queue) {
-      throw new AppError('busy', 'Many checks are running at the moment. Try again in a few seconds.');
-    }
+    if (inHand >= options.threads + options.queue) throw busy();
     inHand += 1;
     const stop = new AbortController();
-    let timedOut = false;
-    const clock = setTimeout(() => {
-      timedOut = true;
+    let verdict: Verdict = null;
+    const giveUp = (reason: Verdict) => () => {
+      verdict = reason;
       stop.abort();
-    }, limits.milliseconds);
+    };
+    let clock = setTimeout(giveUp('waitedTooLong'), PATIENCE);
+    const { port1: told, port2: started } = new MessageChannel();
+    told.once('message', () => {
+      clearTimeout(clock);
+      clock = setTimeout(giveUp('ranTooLong'), limits.milliseconds);
+    });
+    told.unref();
     let grace: NodeJS.Timeout | undefined;
     let clientLeft: (() => void) | undefined;
-    const work: Promise<unknown> = pool.run({ task, payload } satisfies TaskCall, { signal: stop.signal });
+    const work: Promise<unknown> = pool.run({ task, payload, started } satisfies TaskCall, {
+      signal: stop.signal,
+      transferList: [started],
+    });
     const clear = () => {
+      told.close();
       inHand -= 1;
       clearTimeout(clock);
       clearTimeout(grace);
@@ -101,7 +118,7 @@ export function createTaskPool(options: PoolOptions): TaskPool {
       },
       (error: unknown) => {
         clear();
-        throw translate(error, timedOut, limits);
+        throw translate(error, verdict, limits);
       },
     );
     if (limits.signal === undefined) return settled;

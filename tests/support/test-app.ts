@@ -28,6 +28,8 @@ function lazyEngine(): Engine {
     assay: (...args) => started().assay(...args),
     viewDraw: (...args) => started().viewDraw(...args),
     markWorking: (...args) => started().markWorking(...args),
+    chooseDraw: (...args) => started().chooseDraw(...args),
+    buildPaper: (...args) => started().buildPaper(...args),
     close: async () => engine?.close(),
   };
 }

@@ -1,0 +1,169 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+
+import { type ItemContent, itemContentSchema } from '#shared/engine/index.ts';
+import { sampleContent } from '#tests/support/factories.ts';
+
+import { createEngine } from './engine.ts';
+
+const engine = createEngine({
+  threads: 1,
+  report: (error) => {
+    throw error;
+  },
+});
+/** The sample asks for W = eV; its first draw has V = 150 V. */
+const content = sampleContent();
+// A thread that runs from the sources takes some seconds to start.
+beforeAll(() => engine.viewDraw(content, 1), 60_000);
+afterAll(() => engine.close());
+
+const edited = (changes: Partial<ItemContent>): ItemContent =>
+  itemContentSchema.parse({ ...content, ...changes });
+
+describe('viewing a draw', () => {
+  it('gives the sheet and the quantities with their printed values', async () => {
+    const view = await engine.viewDraw(content, 1);
+    expect(view).toMatchObject({ draw: 1, kept: true, gridSize: 16, open: false, diagnostics: [] });
+    expect(JSON.stringify(view.sheet.blocks)).toContain('150\u202FV');
+    // e × 150 V with the exact e of the SI (2019), 1.602176634e-19 C.
+    expect(view.quantities).toMatchObject([
+      { name: 'Va', kind: 'drawn', dimension: 'potential difference (V)', unit: 'V', value: '150\u202FV' },
+      {
+        name: 'W',
+        kind: 'computed',
+        dimension: 'energy (J)',
+        unit: 'J',
+        value: '2.40\u202F×\u202F10⁻¹⁷\u202FJ',
+      },
+    ]);
+    expect(view.scheme.parts[0]?.answer?.text).toBe('2.40\u202F×\u202F10⁻¹⁷\u202FJ');
+  });
+
+  it('says nothing of the answer on the sheet', async () => {
+    const { sheet } = await engine.viewDraw(content, 1);
+    expect(JSON.stringify(sheet)).not.toContain('2.40');
+  });
+
+  it('takes the first kept draw when none is asked for or the one asked for is beyond the grid', async () => {
+    const picky = edited({ script: `${content.script}\nrequire(Va > 200 V)` });
+    // 150 V, 160 V … 210 V: the seventh draw is the first above 200 V.
+    expect(await engine.viewDraw(picky, null)).toMatchObject({ draw: 7, kept: true });
+    expect(await engine.viewDraw(picky, 17)).toMatchObject({ draw: 7, kept: true });
+    expect(await engine.viewDraw(picky, 2)).toMatchObject({ draw: 2, kept: false });
+  });
+
+  it('places a mistake in the script and still shows the sheet', async () => {
+    const view = await engine.viewDraw(
+      edited({ script: 'Va = draw(150 V, 300 V, 10 V)\nW = Va + 1 m' }),
+      null,
+    );
+    expect(view.diagnostics[0]).toMatchObject({ severity: 'error', field: '', span: { line: 2 } });
+    expect(view.sheet.parts).toHaveLength(1);
+  });
+
+  it('places a hole that names nothing', async () => {
+    const view = await engine.viewDraw(edited({ stem: 'First line.\nIt is {{Vb}}.' }), 1);
+    expect(view.diagnostics).toMatchObject([
+      { field: 'stem', code: 'unknownHole', span: { start: 18, end: 24, line: 2, column: 7 } },
+    ]);
+    expect(view.diagnostics[0]?.message).toContain('The script has no quantity “Vb”');
+  });
+
+  it('places what is wrong with an answer and its slips', async () => {
+    const [part] = content.parts;
+    if (part?.kind !== 'numeric') throw new Error('The sample has lost its part.');
+    const slips = [{ id: 's', name: 'forgets e', expression: 'Va', guidance: '', marks: 0 }];
+    const parts = [{ ...part, answer: { ...part.answer, unit: 'joule-ish', quantity: 'X', slips } }];
+    const wrong = await engine.viewDraw(edited({ parts }), 1);
+    expect(wrong.diagnostics.map(({ field }) => field)).toEqual([
+      'parts.0.answer.quantity',
+      'parts.0.answer.unit',
+    ]);
+    const misfit = await engine.viewDraw(
+      edited({ parts: [{ ...part, answer: { ...part.answer, slips } }] }),
+      1,
+    );
+    expect(misfit.diagnostics.map(({ field }) => field)).toEqual(['parts.0.answer.slips.0.expression']);
+  });
+});
+
+describe('marking a reviewer’s working', () => {
+  const mark = (text: string) => engine.markWorking({ content, partId: 'a', draw: 1, text });
+
+  it.each(['2.40e-17 J', '2.403 × 10^-17 J', '24.03 aJ', '2.40e-17', '150 eV'])(
+    'agrees with %s',
+    async (text) => {
+      expect((await mark(text)).agrees).toBe(true);
+    },
+  );
+
+  it.each(['2.50e-17 J', '4.81e-17 J', '2.40e-16 J', '-2.40e-17 J'])(
+    'disagrees with %s without telling the answer',
+    async (text) => {
+      const marked = await mark(text);
+      expect(marked.agrees).toBe(false);
+      expect(marked.remark).toBe('Your working does not agree with the checker.');
+    },
+  );
+
+  it('says when the unit does not fit', async () => {
+    expect((await mark('2.40e-17 V')).remark).toMatch(/unit/);
+  });
+
+  it('asks for a readable answer', async () => {
+    const marked = await mark('quite a lot');
+    expect(marked).toMatchObject({ agrees: false, verdict: { kind: 'notRead' } });
+    expect(marked.remark).toMatch(/could not be read/);
+  });
+});
+
+describe('choosing a draw', () => {
+  it('chooses by chance among the draws that are kept', async () => {
+    const picky = edited({ script: `${content.script}\nrequire(Va > 280 V)` });
+    // Only 290 V and 300 V are kept, the last two of sixteen.
+    for (const chance of [0, 0.5, 0.93, 0.999]) {
+      const { draw } = await engine.chooseDraw(picky, chance);
+      expect([15, 16]).toContain(draw);
+    }
+    expect((await engine.chooseDraw(content, 0.999)).draw).toBe(16);
+  });
+
+  it('finds none where none is kept or the script does not compile', async () => {
+    const none = edited({ script: `${content.script}\nrequire(Va > 1 kV)` });
+    expect((await engine.chooseDraw(none, 0.3)).draw).toBeNull();
+    expect((await engine.chooseDraw(edited({ script: 'x = ' }), 0.3)).draw).toBeNull();
+  });
+});
+
+describe('building a paper', () => {
+  it('puts every item at its draw, in order, and adds the marks up', async () => {
+    const front = {
+      organisation: 'Invented Board',
+      code: 'P-1',
+      title: 'Paper',
+      subtitle: '',
+      durationMinutes: 60,
+      instructions: 'Answer all.',
+      sealHash: null,
+    };
+    const item = { content, figures: [] };
+    const built = await engine.buildPaper({
+      front,
+      items: [
+        { ...item, code: 'A-1', draw: 1 },
+        { ...item, code: 'A-2', draw: 16 },
+      ],
+    });
+    expect(built.sheet.marks).toBe(4);
+    expect(built.sheet.items.map(({ number, code }) => [number, code])).toEqual([
+      [1, 'A-1'],
+      [2, 'A-2'],
+    ]);
+    expect(JSON.stringify(built.sheet.items[1])).toContain('300\u202FV');
+    expect(built.scheme.items[1]?.scheme.parts[0]?.answer?.text).toBe('4.81\u202F×\u202F10⁻¹⁷\u202FJ');
+    expect(built.draws).toEqual([
+      { gridSize: 16, open: false, kept: true, compiles: true },
+      { gridSize: 16, open: false, kept: true, compiles: true },
+    ]);
+  });
+});

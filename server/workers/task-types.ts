@@ -1,0 +1,62 @@
+import type { PaperFront } from '#shared/sheet/build-paper.ts';
+import type { StoredFigure } from '#shared/sheet/build-item.ts';
+import type { PaperScheme, PaperSheet } from '#shared/sheet/model.ts';
+import type { ItemContent, Verdict } from '#shared/engine/index.ts';
+
+/** A draw of an item to be looked at; null asks for the first that every `require` keeps. */
+export interface DrawToView {
+  content: ItemContent;
+  draw: number | null;
+  figures: readonly StoredFigure[];
+}
+
+/** A reviewer's answer to one part of one draw. */
+export interface WorkingToMark {
+  content: ItemContent;
+  partId: string;
+  draw: number;
+  text: string;
+}
+
+/** How a reviewer's answer compares with the script's. */
+export interface MarkedWorking {
+  /** Whether the answer lies in the band. */
+  agrees: boolean;
+  /** Why, for after the reveal; it may tell the answer. */
+  verdict: Verdict;
+  /** What the reviewer may be told before the reveal; it never tells the answer. */
+  remark: string;
+}
+
+/** An item on a paper, in running order. */
+export interface PlacedItem {
+  code: string;
+  content: ItemContent;
+  draw: number;
+  figures: readonly StoredFigure[];
+}
+
+export interface PaperToBuild {
+  front: PaperFront;
+  items: readonly PlacedItem[];
+}
+
+export interface BuiltPaper {
+  sheet: PaperSheet;
+  scheme: PaperScheme;
+  /** Of each item in order: what its draw is like. */
+  draws: { gridSize: number; open: boolean; kept: boolean; compiles: boolean }[];
+}
+
+/** A draw to be chosen by chance: `chance` in [0, 1) decides. */
+export interface DrawToChoose {
+  content: ItemContent;
+  chance: number;
+}
+
+export interface ChosenDraw {
+  /** Null when the script does not compile or keeps no draw. */
+  draw: number | null;
+  gridSize: number;
+  open: boolean;
+}
