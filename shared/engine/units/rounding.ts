@@ -1,10 +1,24 @@
 import { fromSI, powerOfTen, toSI } from './convert.ts';
+import {
+  exactPower,
+  LARGEST_EXACT_POWER,
+  nearestProduct,
+  roundProductNearHalf,
+  roundQuotientNearHalf,
+  type ExactPower,
+} from './exact-scaling.ts';
 import type { Unit } from './unit.ts';
 
 /** Up to so many figures a scaled value stays a whole number that doubles hold with bits to spare. */
 const FAST_FIGURES = 14;
 /** 2^-50: four times the error bound of the one or two scalings below, relative. */
 const DOUBT = 2 ** -50;
+
+/**
+ * 1.5 × 2^52: adding it to a number below 2^51 and taking it away again leaves the nearest whole number, with no
+ * branch that depends on the fraction.
+ */
+const WHOLE = 1.5 * 2 ** 52;
 
 /** floor(log10(magnitude)) for a positive finite double, against the table of powers. */
 function decimalExponent(magnitude: number): number {
@@ -14,20 +28,54 @@ function decimalExponent(magnitude: number): number {
   return exponent;
 }
 
-/**
- * Rounds `x` of known decimal exponent. Scaling by an exact power of ten is one correctly rounded step, so the
- * scaled value tells which way to round unless it lies within a few ulps of a half; only then is the exact
- * decimal expansion (toPrecision) asked. Dividing the whole number back is again one correctly rounded step.
- */
-function roundKnown(x: number, magnitude: number, exponent: number, figures: number): number {
+/** How numbers of one decade are brought to whole numbers of the last figure wanted, and back. */
+interface DecadeScale {
+  /**
+   * `product`: times an exact power of ten; `quotient`: divided by one; `long`: times a power of ten that no double
+   * holds, taken as the sum of two; `none`: by the exact decimal expansion alone.
+   */
+  way: 'product' | 'quotient' | 'long' | 'none';
+  scale: ExactPower;
+  inverse: ExactPower;
+}
+
+const NO_POWER: ExactPower = { high: 1, low: 0 };
+const LARGEST_SINGLE_POWER = 22;
+
+function decadeScale(exponent: number, figures: number): DecadeScale {
   const shift = figures - 1 - exponent;
-  if (shift > 22 || shift < -22) return Number(x.toPrecision(figures));
-  const scaled = shift >= 0 ? magnitude * powerOfTen(shift) : magnitude / powerOfTen(-shift);
-  const whole = Math.floor(scaled);
-  const rest = scaled - whole - 0.5;
-  if (rest < scaled * DOUBT && -rest < scaled * DOUBT) return Number(x.toPrecision(figures));
-  const rounded = rest > 0 ? whole + 1 : whole;
-  const result = shift >= 0 ? rounded / powerOfTen(shift) : rounded * powerOfTen(-shift);
+  if (figures > FAST_FIGURES || !(shift >= -LARGEST_SINGLE_POWER && shift <= LARGEST_EXACT_POWER)) {
+    return { way: 'none', scale: NO_POWER, inverse: NO_POWER };
+  }
+  if (shift < 0) return { way: 'quotient', scale: { high: powerOfTen(-shift), low: 0 }, inverse: NO_POWER };
+  if (shift <= LARGEST_SINGLE_POWER) {
+    return { way: 'product', scale: { high: powerOfTen(shift), low: 0 }, inverse: NO_POWER };
+  }
+  return { way: 'long', scale: exactPower(shift), inverse: exactPower(-shift) };
+}
+
+/**
+ * Rounds `x` by the scale of its decade. One scaling tells which way to round unless it lands within a few ulps of
+ * a half; then the exact product decides. Scaling back is correctly rounded: by one division or product with an
+ * exact power of ten, or by a product in twice the precision.
+ */
+function roundInDecade(x: number, magnitude: number, figures: number, decade: DecadeScale): number {
+  const { way, scale, inverse } = decade;
+  let result = NaN;
+  if (way !== 'none') {
+    const scaled = way === 'quotient' ? magnitude / scale.high : magnitude * scale.high;
+    let rounded = scaled + WHOLE - WHOLE;
+    if (Math.abs(scaled - rounded) > 0.5 - scaled * DOUBT) {
+      rounded =
+        way === 'quotient'
+          ? roundQuotientNearHalf(magnitude, scale.high, scaled)
+          : roundProductNearHalf(magnitude, scale, scaled);
+    }
+    if (way === 'product') result = rounded / scale.high;
+    else if (way === 'quotient') result = rounded * scale.high;
+    else result = nearestProduct(rounded, inverse);
+  }
+  if (result !== result) return Number(x.toPrecision(figures));
   return x < 0 ? -result : result;
 }
 
@@ -40,7 +88,7 @@ export function roundToFigures(x: number, figures: number): number {
   if (magnitude === 0) return 0;
   if (!(magnitude < Infinity) || figures > FAST_FIGURES || magnitude < 1e-300)
     return Number(x.toPrecision(figures));
-  return roundKnown(x, magnitude, decimalExponent(magnitude), figures);
+  return roundInDecade(x, magnitude, figures, decadeScale(decimalExponent(magnitude), figures));
 }
 
 /**
@@ -53,36 +101,38 @@ export function roundColumnToFigures(
   count: number,
   figures: number,
 ): void {
-  const doubt = powerOfTen(figures) * DOUBT;
+  const clear = 0.5 - powerOfTen(figures) * DOUBT;
   let exponent = 0;
   let low = Infinity;
   let high = Infinity;
-  let shift = 0;
+  let decade = decadeScale(0, figures);
+  let isProduct = false;
   let scale = 1;
   for (let index = 0; index < count; index += 1) {
     const x = column[index] as number;
     const magnitude = x < 0 ? -x : x;
     if (!(magnitude >= low && magnitude < high)) {
       exponent = neighbouringExponent(magnitude, exponent);
-      shift = figures - 1 - exponent;
-      if (!(shift >= -22 && shift <= 22 && figures <= FAST_FIGURES)) {
+      if (exponent !== exponent) {
         low = high = Infinity;
         out[index] = roundToFigures(x, figures);
         continue;
       }
       low = powerOfTen(exponent);
       high = powerOfTen(exponent + 1);
-      scale = powerOfTen(Math.abs(shift));
+      decade = decadeScale(exponent, figures);
+      isProduct = decade.way === 'product';
+      scale = decade.scale.high;
     }
-    const scaled = shift >= 0 ? magnitude * scale : magnitude / scale;
-    const whole = Math.floor(scaled);
-    const rest = scaled - whole - 0.5;
-    if (rest < doubt && rest > -doubt) {
-      out[index] = Number(x.toPrecision(figures));
+    // Everyday sizes, in as few steps as can be; all else goes the general way.
+    const scaled = magnitude * scale;
+    const rounded = scaled + WHOLE - WHOLE;
+    const rest = scaled - rounded;
+    if (!isProduct || rest > clear || rest < -clear) {
+      out[index] = roundInDecade(x, magnitude, figures, decade);
       continue;
     }
-    const rounded = rest > 0 ? whole + 1 : whole;
-    const result = shift >= 0 ? rounded / scale : rounded * scale;
+    const result = rounded / scale;
     out[index] = x < 0 ? -result : result;
   }
 }
