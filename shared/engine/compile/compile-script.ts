@@ -1,6 +1,7 @@
 import type { Diagnostic } from '../diagnostics/diagnostic.ts';
 import { errorAt, hasError } from '../diagnostics/spans.ts';
-import { checkStatement, usesOf, type CheckedStatement } from '../script/check-statement.ts';
+import { checkStatement, type CheckedStatement } from '../script/check-statement.ts';
+import { usesOf } from '../script/statement-uses.ts';
 import { SCRIPT_LIMITS } from '../script/limits.ts';
 import { parseStatement } from '../script/parse-statement.ts';
 import type { ScopeEntry } from '../script/scope.ts';

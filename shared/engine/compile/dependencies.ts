@@ -1,4 +1,4 @@
-import { usesOf } from '../script/check-statement.ts';
+import { usesOf } from '../script/statement-uses.ts';
 import type { Statement } from '../script/statement.ts';
 import type { CompiledScript } from './compiled-script.ts';
 

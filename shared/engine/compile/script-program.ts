@@ -2,7 +2,7 @@ import { coherentUnit } from '../units/quantity-kinds.ts';
 import { readUnit } from '../units/read-unit.ts';
 import type { Unit } from '../units/unit.ts';
 import type { ChoiceLevels, Statement, StepLevels } from '../script/statement.ts';
-import { usesOf } from '../script/check-statement.ts';
+import { usesOf } from '../script/statement-uses.ts';
 import type { CompiledScript, EvaluationOptions } from './compiled-script.ts';
 import { constantValue } from './constant-precision.ts';
 import { fillDrawn, type BlockDraws } from './draw-columns.ts';

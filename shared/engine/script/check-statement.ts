@@ -1,6 +1,5 @@
 import type { Diagnostic, Span } from '../diagnostics/diagnostic.ts';
 import { errorAt, hasError, joinSpans } from '../diagnostics/spans.ts';
-import { CONSTANTS } from '../physics/constants.ts';
 import { sameDimension, type Dimension } from '../units/dimension.ts';
 import { coherentUnit, describeDimension } from '../units/quantity-kinds.ts';
 import { readUnit } from '../units/read-unit.ts';
@@ -284,20 +283,4 @@ function commonDecimals(trees: readonly ExpressionTree[], unit: Unit): number | 
     decimals = Math.max(decimals, -literal.exponent);
   }
   return decimals;
-}
-
-/** Names and constants that a checked statement uses directly. */
-export function usesOf(statement: Statement): { names: string[]; constants: string[] } {
-  switch (statement.kind) {
-    case 'drawn': {
-      const levels = statement.levels;
-      const constants =
-        levels.kind === 'choices' ? levels.choices.flatMap((tree) => namesIn(tree).constants) : [];
-      return { names: [], constants: [...new Set(constants)].filter((name) => CONSTANTS.has(name)) };
-    }
-    case 'scatter':
-      return namesIn(statement.deviation);
-    default:
-      return namesIn(statement.tree);
-  }
 }

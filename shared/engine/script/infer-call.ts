@@ -2,7 +2,8 @@ import { DIMENSIONLESS, divideDimensions, powerOfDimension } from '../units/dime
 import type { ExpressionTree } from './expression-tree.ts';
 import type { FunctionName } from './functions.ts';
 import { FUNCTION_TABLE } from './functions.ts';
-import { quote, type TypeInference } from './infer-type.ts';
+import { quote } from './describe-clash.ts';
+import type { InferenceTools } from './inference-tools.ts';
 import type { Shape, ValueType } from './scope.ts';
 
 type Call = Extract<ExpressionTree, { kind: 'call' }>;
@@ -19,7 +20,7 @@ const ROUNDING: ReadonlySet<FunctionName> = new Set(['floor', 'ceil', 'round']);
 const SERIES: ReadonlySet<FunctionName> = new Set(['mean', 'least', 'greatest', 'sum', 'quantum']);
 
 /** Dimension and shape of a function's value; null, with a message, when its arguments do not fit. */
-export function inferCall(inference: TypeInference, call: Call): ValueType | null {
+export function inferCall(inference: InferenceTools, call: Call): ValueType | null {
   const name = call.function;
   const [least, most] = COUNTS.get(name) ?? [1, 1];
   const count = call.arguments.length;
@@ -52,7 +53,7 @@ export function inferCall(inference: TypeInference, call: Call): ValueType | nul
 }
 
 function seriesFunction(
-  inference: TypeInference,
+  inference: InferenceTools,
   name: FunctionName,
   series: ExpressionTree,
 ): ValueType | null {
@@ -62,7 +63,7 @@ function seriesFunction(
   return { dimension: type.dimension, shape: { kind: 'scalar' } };
 }
 
-function notSeries(inference: TypeInference, name: FunctionName, tree: ExpressionTree): null {
+function notSeries(inference: InferenceTools, name: FunctionName, tree: ExpressionTree): null {
   const other =
     name === 'least'
       ? ' For the smallest of several values use min.'
@@ -77,7 +78,7 @@ function notSeries(inference: TypeInference, name: FunctionName, tree: Expressio
 }
 
 function lineFunction(
-  inference: TypeInference,
+  inference: InferenceTools,
   name: FunctionName,
   xTree: ExpressionTree,
   yTree: ExpressionTree,
@@ -94,7 +95,7 @@ function lineFunction(
   return { dimension, shape: { kind: 'scalar' } };
 }
 
-function extreme(inference: TypeInference, call: Call): ValueType | null {
+function extreme(inference: InferenceTools, call: Call): ValueType | null {
   const types = inference.alike(call.arguments, 'only values of one kind can be compared');
   if (types === null) return null;
   let shape: Shape | null = { kind: 'scalar' };

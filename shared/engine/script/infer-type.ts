@@ -9,34 +9,22 @@ import {
   powerOfDimension,
   sameDimension,
 } from '../units/dimension.ts';
-import { describeDimension, kindOfDimension } from '../units/quantity-kinds.ts';
-import { findUnitSymbol } from '../units/unit.ts';
 import { exactFraction } from './constant-value.ts';
-import { expressionText } from './expression-text.ts';
+import { describeClash, describeValue, quote, type TypedTree } from './describe-clash.ts';
 import type { ExpressionTree } from './expression-tree.ts';
-import { FUNCTION_TABLE, isFunctionName } from './functions.ts';
 import { inferCall } from './infer-call.ts';
-import { nameProblem, type Scope, type Shape, type ValueType } from './scope.ts';
-import { mostSimilar } from './similar.ts';
-import { suggestUnitFor } from './suggest-unit.ts';
+import type { InferenceTools } from './inference-tools.ts';
+import type { Scope, Shape, ValueType } from './scope.ts';
+import { unknownName } from './unknown-name.ts';
 
 const CONDITION: ValueType = { dimension: DIMENSIONLESS, shape: { kind: 'condition' } };
 const SCALAR: Shape = { kind: 'scalar' };
-
-/** The longest piece of an expression that a message quotes. */
-const QUOTED_LENGTH = 48;
-
-/** A piece of the script between backticks, shortened. */
-export function quote(tree: ExpressionTree): string {
-  const text = expressionText(tree);
-  return `\`${text.length > QUOTED_LENGTH ? `${text.slice(0, QUOTED_LENGTH)}…` : text}\``;
-}
 
 /**
  * Infers dimension and shape of expressions and collects what clashes. A part that is wrong gives null, and
  * whatever holds it stays silent, so that one mistake is told once.
  */
-export class TypeInference {
+export class TypeInference implements InferenceTools {
   readonly diagnostics: Diagnostic[] = [];
   readonly scope: Scope;
 
@@ -51,10 +39,7 @@ export class TypeInference {
 
   /** A value in words with its own unit: `Va` is a potential difference (kV). */
   describe(tree: ExpressionTree, type: ValueType): string {
-    if (type.shape.kind === 'condition') return `${quote(tree)} is a condition`;
-    const unit = suggestUnitFor(tree, this.scope, type.dimension)?.text;
-    const noun = describeDimension(type.dimension, unit);
-    return `${quote(tree)} is ${noun}`;
+    return describeValue(tree, type, this.scope);
   }
 
   infer(tree: ExpressionTree): ValueType | null {
@@ -95,35 +80,8 @@ export class TypeInference {
     if (entry !== undefined) return entry.type;
     const constant = CONSTANTS.get(name);
     if (constant !== undefined) return { dimension: constant.dimension, shape: SCALAR };
-    if (this.scope.all.has(name)) {
-      return this.fail(
-        span,
-        'used-before-defined',
-        `\`${name}\` is used before it has a value: move the line that defines it above this one.`,
-      );
-    }
-    const problem = nameProblem(name);
-    if (problem !== null) return this.fail(span, 'name-not-allowed', problem);
-    if (isFunctionName(name)) {
-      return this.fail(
-        span,
-        'function-without-brackets',
-        `\`${name}\` is a function: write ${FUNCTION_TABLE.get(name)?.signature ?? name}.`,
-      );
-    }
-    if (findUnitSymbol(name) !== null) {
-      return this.fail(
-        span,
-        'unit-not-after-number',
-        `\`${name}\` is a unit and stands only straight after a number: write 1 ${name}.`,
-      );
-    }
-    const similar = mostSimilar(name, [...this.scope.defined.keys(), ...CONSTANTS.keys()]);
-    return this.fail(
-      span,
-      'unknown-name',
-      `\`${name}\` has no value: ${similar === null ? 'define it on a line above' : `did you mean \`${similar}\``}${similar === null ? '.' : '?'}`,
-    );
+    const mistake = unknownName(name, this.scope);
+    return this.fail(span, mistake.code, mistake.message);
   }
 
   /** A number or series of numbers; a condition is refused. */
@@ -172,40 +130,17 @@ export class TypeInference {
     if (tree.operator === '/') return { dimension: divideDimensions(left.dimension, right.dimension), shape };
     if (sameDimension(left.dimension, right.dimension)) return { dimension: left.dimension, shape };
     const deed = tree.operator === '+' ? 'added' : 'subtracted';
-    return this.clash(tree.left, left, tree.right, right, `they cannot be ${deed}`, tree.span);
+    return this.clash(
+      { tree: tree.left, type: left },
+      { tree: tree.right, type: right },
+      `they cannot be ${deed}`,
+      tree.span,
+    );
   }
 
   /** Says that two values of different dimension meet, what each is, and what would most likely cure it. */
-  clash(
-    leftTree: ExpressionTree,
-    left: ValueType,
-    rightTree: ExpressionTree,
-    right: ValueType,
-    what: string,
-    span: Span,
-  ): null {
-    const said = `${this.describe(leftTree, left)}; ${this.describe(rightTree, right)}: ${what}.`;
-    return this.fail(span, 'dimensions-differ', `${said}${this.cureFor(leftTree, left, rightTree, right)}`);
-  }
-
-  private cureFor(
-    leftTree: ExpressionTree,
-    left: ValueType,
-    rightTree: ExpressionTree,
-    right: ValueType,
-  ): string {
-    for (const tree of [leftTree, rightTree]) {
-      const bare = tree.kind === 'negate' ? tree.operand : tree;
-      if (bare.kind === 'number' && bare.unit.text === '')
-        return ` Write the unit straight after ${bare.literal}.`;
-    }
-    const more = kindOfDimension(divideDimensions(left.dimension, right.dimension));
-    if (more !== null)
-      return ` Is ${quote(rightTree)} to be multiplied by ${withArticle(more)}, or ${quote(leftTree)} divided by one?`;
-    const less = kindOfDimension(divideDimensions(right.dimension, left.dimension));
-    if (less !== null)
-      return ` Is ${quote(leftTree)} to be multiplied by ${withArticle(less)}, or ${quote(rightTree)} divided by one?`;
-    return ' Is a bracket, a power or a factor missing?';
+  clash(left: TypedTree, right: TypedTree, what: string, span: Span): null {
+    return this.fail(span, 'dimensions-differ', describeClash(left, right, what, this.scope));
   }
 
   private inferPower(
@@ -234,7 +169,12 @@ export class TypeInference {
       const rightTree = tree.operands[index];
       if (!left || !right || leftTree === undefined || rightTree === undefined) continue;
       if (!sameDimension(left.dimension, right.dimension)) {
-        return this.clash(leftTree, left, rightTree, right, 'they cannot be compared', tree.span);
+        return this.clash(
+          { tree: leftTree, type: left },
+          { tree: rightTree, type: right },
+          'they cannot be compared',
+          tree.span,
+        );
       }
       if (this.joinShapes(left.shape, right.shape, tree.span) === null) return null;
     }
@@ -271,10 +211,8 @@ export class TypeInference {
     }
     if (!sameDimension(yes.dimension, no.dimension)) {
       return this.clash(
-        tree.whenTrue,
-        yes,
-        tree.whenFalse,
-        no,
+        { tree: tree.whenTrue, type: yes },
+        { tree: tree.whenFalse, type: no },
         'a choice gives one kind of value',
         tree.span,
       );
@@ -293,7 +231,7 @@ export class TypeInference {
       const tree = trees[index];
       if (!first || !type || firstTree === undefined || tree === undefined) continue;
       if (!sameDimension(first.dimension, type.dimension)) {
-        return this.clash(firstTree, first, tree, type, what, tree.span);
+        return this.clash({ tree: firstTree, type: first }, { tree, type }, what, tree.span);
       }
     }
     return types.every((type) => type !== null) ? types : null;
@@ -338,8 +276,4 @@ export class TypeInference {
     }
     return { dimension: type.dimension, shape: SCALAR };
   }
-}
-
-function withArticle(kind: string): string {
-  return `${/^[aeiou]/.test(kind) ? 'an' : 'a'} ${kind}`;
 }

@@ -5,7 +5,7 @@ import { CONSTANTS } from '../physics/constants.ts';
 import type { BinaryOperator, ComparisonOperator, ExpressionTree } from './expression-tree.ts';
 import { isFunctionName } from './functions.ts';
 import { SCRIPT_LIMITS } from './limits.ts';
-import type { NormalisedExpression } from './parse-expression.ts';
+import type { NormalisedExpression } from './normalised-expression.ts';
 
 const { parse } = create(parseDependencies ?? {});
 

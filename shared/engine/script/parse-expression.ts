@@ -6,19 +6,10 @@ import type { ExpressionTree } from './expression-tree.ts';
 import { DRAWING_TABLE, FUNCTION_TABLE, isFunctionName } from './functions.ts';
 import { SCRIPT_LIMITS } from './limits.ts';
 import { readMathTree } from './math-tree.ts';
+import type { NormalisedExpression } from './normalised-expression.ts';
 import { mostSimilar } from './similar.ts';
 import type { Token } from './tokens.ts';
 import { joinUnitLiterals, type Item } from './unit-literals.ts';
-
-/** An expression that mathjs can read: every leaf is written L<n>, every function F<n>, n the index of its item. */
-export interface NormalisedExpression {
-  text: string;
-  items: readonly Item[];
-  /** For every character of `text`, the index of the item that it comes from. */
-  itemAt: readonly number[];
-  /** For the index of each opening bracket, that of its partner. */
-  partner: ReadonlyMap<number, number>;
-}
 
 /** Functions by the names they have elsewhere. */
 const OTHER_NAMES: ReadonlyMap<string, string> = new Map([
