@@ -44,22 +44,30 @@ export function printedUnit(unit: string): string {
   return reading.ok ? formatQuantity(1, reading.unit, { figures: 1 }).unitText : unit;
 }
 
-/** The answer's own values: `answer` is the model answer in `unit` at the draw on show. */
+/** Powers of ten that are taken out of the ticks into the caption: those that would print in standard form. */
+function sharedPower(answer: number): number {
+  const power = Math.floor(Math.log10(Math.abs(answer)));
+  return power >= -3 && power <= 3 ? 0 : power;
+}
+
+/** The answer's own values: `answer` is the model answer in `unit` at the draw on show, neither zero nor infinite. */
 export function unitAxis(answer: number, unit: string, range: number): Axis {
   const words = printedUnit(unit);
+  const power = sharedPower(answer);
   const at = (error: number): number => answer * (1 + error);
   const figures = Math.min(8, Math.max(3, 2 - Math.floor(Math.log10(range / 4))));
-  const numberText = (error: number): string => formatNumber(at(error), { figures }).text;
   const withUnit = (text: string): string => (words === '' ? text : `${text}\u202f${words}`);
+  const scale =
+    power === 0 ? '' : `×\u202f${formatNumber(10 ** power, { figures: 1 }).text.replace(/^1\s×\s/, '')}`;
   return {
     kind: 'unit',
-    caption: words === '' ? 'answer' : words,
-    tickText: numberText,
-    valueText: (error) => withUnit(numberText(error)),
+    caption: withUnit(scale).trim() === '' ? 'answer' : withUnit(scale).trim(),
+    tickText: (error) => formatNumber(at(error) / 10 ** power, { figures }).text,
+    valueText: (error) => withUnit(formatNumber(at(error), { figures }).text),
     toTyped: (error) => String(Number(at(error).toPrecision(figures))),
     fromTyped: (text) => {
       const value = typedNumber(text);
-      return value === null || answer === 0 ? null : value / answer - 1;
+      return value === null ? null : value / answer - 1;
     },
   };
 }
