@@ -92,3 +92,10 @@ export {
   type HolePrinting,
 } from './holes/fill-hole.ts';
 export { answerBand, type AnswerBand } from './assay/answer-band.ts';
+export { assayedHash, assayItem, ENGINE_VERSION, type AssayOptions } from './assay/assay-item.ts';
+export { canonicalJson } from './assay/content-hash.ts';
+export type { FigureFacts } from './assay/context.ts';
+export { SEVERITY_TABLE, type FindingCode } from './assay/severity.ts';
+export { TIDY_PERCENTS } from './assay/recommend-band.ts';
+export { LAWS } from './physics/laws.ts';
+export { findRole, ROLES_OF_QUANTITIES, type RoleRow } from './physics/roles.ts';

@@ -1,0 +1,114 @@
+import { evaluateBlock } from '../compile/evaluate.ts';
+import type { BlockValues } from '../compile/compiled-script.ts';
+import { dependenciesOf } from '../compile/dependencies.ts';
+import { LAWS, suggestForFactor, type LawRow } from '../physics/laws.ts';
+import { findRole } from '../physics/roles.ts';
+import { drawsInWords, finding, Tally, type CheckStart } from './check.ts';
+import { bindRoles, isBound, roleValue, type BoundSet } from './roles-bound.ts';
+import type { AssayContext } from './context.ts';
+
+/** Room for floating-point arithmetic and for constants quoted to ten figures. */
+const FLOOR = 1e-6;
+/** Givens are rounded half a unit at most; a little more is allowed for second-order effects. */
+const ROOM = 1.2;
+
+interface BoundLaw {
+  law: LawRow;
+  set: BoundSet;
+  names: string[];
+  /** Rounded givens that the bound names rest on, with the figures they print. */
+  givens: { name: string; figures: number }[];
+  tally: Tally;
+  worstRatio: number;
+}
+
+function roundedGivens(context: AssayContext, names: readonly string[]): BoundLaw['givens'] {
+  const reached = new Set(names.flatMap((name) => [name, ...dependenciesOf(context.script, name).names]));
+  return context.script.quantities.flatMap((quantity) =>
+    quantity.kind === 'given' && quantity.figures !== null && reached.has(quantity.name)
+      ? [{ name: quantity.name, figures: quantity.figures }]
+      : [],
+  );
+}
+
+function ratioAt({ law, set }: BoundLaw, columns: ReadonlyMap<string, Float64Array>, index: number): number {
+  const value = roleValue(set, columns, index);
+  return value(law.subject) / law.formula(value);
+}
+
+/** How far rounding the givens as printed can move the law's ratio, relative, draw by draw. */
+function roundingRoom(context: AssayContext, bound: BoundLaw, block: BlockValues): Float64Array {
+  const room = new Float64Array(block.draws.length);
+  for (const { name, figures } of bound.givens) {
+    const column = block.columns.get(name);
+    if (column === undefined) continue;
+    const halfUnits = column.map((value) => {
+      const exponent = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+      return 0.5 * 10 ** (exponent - figures + 1);
+    });
+    const moved = evaluateBlock(context.script, block.draws, {
+      wanted: bound.names,
+      conditions: false,
+      pinned: new Map([[name, column.map((value, index) => value + (halfUnits[index] ?? 0))]]),
+    });
+    for (let index = 0; index < room.length; index += 1) {
+      const change = Math.log(ratioAt(bound, moved.columns, index) / ratioAt(bound, block.columns, index));
+      room[index] = (room[index] ?? 0) + Math.abs(change);
+    }
+  }
+  return room;
+}
+
+function ratioInWords(ratio: number): string {
+  const size = Math.abs(ratio);
+  return size >= 1e4 || size < 1e-2
+    ? ratio.toExponential(2).replace('e', ' × 10^').replace('+', '')
+    : ratio.toPrecision(3);
+}
+
+/** 3. Every law whose roles are all bound holds on every draw, to the rounding of the givens. */
+export const checkLaws: CheckStart = (context) => {
+  const bound = bindRoles(context).flatMap((set) =>
+    LAWS.filter((law) => set.names.has(law.subject) && law.others.every((role) => isBound(set, role))).map(
+      (law): BoundLaw => {
+        const names = [law.subject, ...law.others].flatMap((role) => set.names.get(role) ?? []);
+        return { law, set, names, givens: roundedGivens(context, names), tally: new Tally(), worstRatio: 1 };
+      },
+    ),
+  );
+  return {
+    visit: (block) => {
+      for (const entry of bound) {
+        let room: Float64Array | null = null;
+        for (let index = 0; index < block.draws.length; index += 1) {
+          if (block.kept[index] === 0) continue;
+          const ratio = ratioAt(entry, block.columns, index);
+          const miss = Math.abs(Math.log(ratio));
+          if (miss <= FLOOR || Number.isNaN(ratio)) continue;
+          room ??= roundingRoom(context, entry, block);
+          if (ratio > 0 && miss <= FLOOR + ROOM * (room[index] ?? 0)) continue;
+          const badness = ratio > 0 ? miss : Infinity;
+          if (badness > entry.tally.worstBadness) entry.worstRatio = ratio;
+          entry.tally.add(block.draws[index] ?? 0, badness);
+        }
+      }
+    },
+    finish: () =>
+      bound
+        .filter(({ tally }) => tally.count > 0)
+        .map(({ law, set, tally, worstRatio }) => {
+          const name = set.names.get(law.subject) ?? law.subject;
+          const role = findRole(law.subject)?.name ?? law.subject;
+          const suggestion =
+            worstRatio > 0 ? suggestForFactor(worstRatio) : 'The sign is the other way round.';
+          const info = context.script.quantities.find((quantity) => quantity.name === name);
+          return finding('law-broken', {
+            about: `${law.id}:${set.set}`,
+            statement: `The script’s “${name}” (${role}) is ${ratioInWords(worstRatio)} times what ${law.statement} gives, on draw ${tally.worstDraw}; ${drawsInWords(tally.count)} show it.${suggestion === '' ? '' : ` ${suggestion}`}`,
+            cure: `Mend the line that works out “${name}”, or correct what the quantities stand for.`,
+            place: { quantity: name, span: info?.span },
+            tally,
+          });
+        }),
+  };
+};

@@ -1,0 +1,193 @@
+import { compileExpression, evaluateExpression } from '../compile/expressions.ts';
+import { evaluateBlock } from '../compile/evaluate.ts';
+import type { BlockValues } from '../compile/compiled-script.ts';
+import { fromSI } from '../units/convert.ts';
+import { roundToFigures } from '../units/rounding.ts';
+import { Tally } from './check.ts';
+import type { AssayContext, AssayPart } from './context.ts';
+import { nearMissesOf, type NearMiss } from './near-misses.ts';
+import { bandsOfBlock, within } from './part-marking.ts';
+import { followRoute, routesOf, type Route } from './routes.ts';
+
+/** How far a working's answers lie from the model answer over the draws, as relative errors. */
+export interface Reach {
+  /** Signed, closest to the model answer. */
+  closest: number;
+  /** Signed, furthest from it. */
+  furthest: number;
+  /** Draw of the closest approach. */
+  draw: number;
+  /** Draws on which the answer lies in the band. */
+  inside: Tally;
+  /** Closest approach to the band, in half-widths of the band beyond its end; negative inside. */
+  margin: number;
+}
+
+export interface MeasuredRoute {
+  route: Route;
+  reach: Reach;
+  /** Draws on which this honest answer falls outside the band. */
+  outside: Tally;
+}
+
+export interface MeasuredWorking {
+  kind: 'slip' | 'nearMiss';
+  label: string;
+  reach: Reach;
+}
+
+/** Everything that is measured of one part over the draws. */
+export interface PartMeasure {
+  part: AssayPart;
+  routes: MeasuredRoute[];
+  workings: MeasuredWorking[];
+  /** Extremes of all routes, relative to the model answer, signed. */
+  below: number;
+  above: number;
+  worstRoute: Route | null;
+  worstRouteDraw: number | null;
+  /** Narrowest band over the draws, relative, positive. */
+  bandBelow: number;
+  bandAbove: number;
+  bandMistake: boolean;
+  drawsFollowed: number;
+  visit: (block: BlockValues) => void;
+}
+
+/** Evaluations of one part's routes that an assay affords. */
+const ROUTE_BUDGET = 300_000;
+
+const newReach = (): Reach => ({
+  closest: Infinity,
+  furthest: 0,
+  draw: 0,
+  inside: new Tally(),
+  margin: Infinity,
+});
+
+function note(reach: Reach, draw: number, value: number, answer: number, from: number, to: number): void {
+  const error = (value - answer) / Math.abs(answer);
+  if (!Number.isFinite(error)) return;
+  if (Math.abs(error) < Math.abs(reach.closest)) {
+    reach.closest = error;
+    reach.draw = draw;
+  }
+  if (Math.abs(error) > Math.abs(reach.furthest)) reach.furthest = error;
+  const half = value >= answer ? to - answer : answer - from;
+  const beyond = value >= answer ? value - to : from - value;
+  const margin = half > 0 ? beyond / half : beyond / Math.abs(answer || 1);
+  if (margin < reach.margin) reach.margin = margin;
+  if (within(value, from, to)) reach.inside.add(draw, -Math.abs(error));
+}
+
+/** Picks every `stride`-th kept draw of a block, evaluated in full. */
+function thin(context: AssayContext, block: BlockValues, stride: number, offset: number): BlockValues | null {
+  const chosen: number[] = [];
+  let at = offset;
+  for (let index = 0; index < block.draws.length; index += 1) {
+    if (block.kept[index] === 0) continue;
+    if (at % stride === 0) chosen.push(block.draws[index] ?? 0);
+    at += 1;
+  }
+  if (chosen.length === 0) return null;
+  return evaluateBlock(context.script, Float64Array.from(chosen), { conditions: false });
+}
+
+function slipsOf(context: AssayContext, { part }: AssayPart): { label: string; miss: NearMiss }[] {
+  return part.answer.slips.flatMap((slip) => {
+    const { expression } = compileExpression(context.script, slip.expression);
+    if (expression?.shape.kind !== 'scalar') return [];
+    return [{ label: slip.name || slip.expression, miss: { label: slip.name, expression, factor: 1 } }];
+  });
+}
+
+/** A measure of one part that is fed block by block. */
+export function measurePart(context: AssayContext, part: AssayPart): PartMeasure {
+  const figures = part.part.answer.figures;
+  const routes = routesOf(context, part).map((route): MeasuredRoute => ({
+    route,
+    reach: newReach(),
+    outside: new Tally(),
+  }));
+  const slips = slipsOf(context, part);
+  const misses = nearMissesOf(context, part);
+  const wrong = [
+    ...slips.map(({ label, miss }) => ({
+      working: { kind: 'slip' as const, label, reach: newReach() },
+      miss,
+    })),
+    ...misses.map((miss) => ({
+      working: { kind: 'nearMiss' as const, label: miss.label, reach: newReach() },
+      miss,
+    })),
+  ];
+  const each = routes.length + wrong.length;
+  const stride = Math.max(1, Math.ceil((context.plan.count * each) / ROUTE_BUDGET));
+  let passed = 0;
+
+  const measure: PartMeasure = {
+    part,
+    routes,
+    workings: wrong.map(({ working }) => working),
+    below: 0,
+    above: 0,
+    worstRoute: null,
+    worstRouteDraw: null,
+    bandBelow: Infinity,
+    bandAbove: Infinity,
+    bandMistake: false,
+    drawsFollowed: 0,
+    visit: (block) => {
+      const sample = thin(context, block, stride, passed);
+      for (const kept of block.kept) passed += kept;
+      if (sample === null) return;
+      const bands = bandsOfBlock(part, sample);
+      if (bands === null) {
+        measure.bandMistake = true;
+        return;
+      }
+      measure.drawsFollowed += sample.draws.length;
+      for (let index = 0; index < sample.draws.length; index += 1) {
+        const answer = bands.answers[index] ?? NaN;
+        const size = Math.abs(answer) || 1;
+        measure.bandBelow = Math.min(measure.bandBelow, (answer - (bands.from[index] ?? NaN)) / size);
+        measure.bandAbove = Math.min(measure.bandAbove, ((bands.to[index] ?? NaN) - answer) / size);
+      }
+      for (const entry of routes) {
+        const column = followRoute(context, part, entry.route, sample);
+        for (let index = 0; index < column.length; index += 1) {
+          const answer = bands.answers[index] ?? NaN;
+          const value = roundToFigures(fromSI(column[index] ?? NaN, part.unit), figures);
+          const draw = sample.draws[index] ?? 0;
+          const from = bands.from[index] ?? NaN;
+          const to = bands.to[index] ?? NaN;
+          const error = (value - answer) / Math.abs(answer || 1);
+          if (!Number.isFinite(error)) continue;
+          note(entry.reach, draw, value, answer, from, to);
+          if (!within(value, from, to)) entry.outside.add(draw, Math.abs(error));
+          if (Math.abs(error) > Math.max(measure.above, -measure.below)) {
+            measure.worstRoute = entry.route;
+            measure.worstRouteDraw = draw;
+          }
+          measure.below = Math.min(measure.below, error);
+          measure.above = Math.max(measure.above, error);
+        }
+      }
+      for (const { working, miss } of wrong) {
+        const column = evaluateExpression(miss.expression, sample);
+        for (let index = 0; index < column.length; index += 1) {
+          const value = fromSI((column[index] ?? NaN) * miss.factor, part.unit);
+          note(
+            working.reach,
+            sample.draws[index] ?? 0,
+            value,
+            bands.answers[index] ?? NaN,
+            bands.from[index] ?? NaN,
+            bands.to[index] ?? NaN,
+          );
+        }
+      }
+    },
+  };
+  return measure;
+}
