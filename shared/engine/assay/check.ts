@@ -65,3 +65,12 @@ export function finding(code: FindingCode, parts: FindingParts): Finding {
 export function drawsInWords(count: number): string {
   return count === 1 ? '1 draw' : `${count.toLocaleString('en-GB')} draws`;
 }
+
+/** A relative size in words: as "0.57 %", "120 %", or "200 times". */
+export function shareInWords(share: number): string {
+  const size = Math.abs(share);
+  if (size >= 10) {
+    return size >= 1e4 ? 'over ten thousand times' : `${Math.round(size).toLocaleString('en-GB')} times`;
+  }
+  return size >= 1 ? `${Math.round(size * 100)} %` : `${Number((size * 100).toPrecision(2))} %`;
+}

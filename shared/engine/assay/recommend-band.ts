@@ -1,3 +1,4 @@
+import { shareInWords } from './check.ts';
 import type { PartScale } from './report.ts';
 
 /** Tidy half-widths, percent: what people write on mark schemes. */
@@ -19,8 +20,6 @@ interface BandQuestion {
   exact: boolean;
 }
 
-const percent = (share: number) => `${(share * 100).toPrecision(2)} %`;
-
 /** The narrowest tidy band that takes all routes and leaves the nearest wrong working out. */
 export function recommendBand(question: BandQuestion): PartScale['recommended'] {
   const { below, above, nearestWrong, bandBelow, bandAbove, exact } = question;
@@ -30,9 +29,9 @@ export function recommendBand(question: BandQuestion): PartScale['recommended'] 
   }
   const tidy = TIDY_PERCENTS.find((candidate) => candidate / 100 >= spread - 1e-9) ?? null;
   const own = Math.min(bandBelow, bandAbove);
-  const needs = `Honest rounding needs ${percent(spread)}`;
+  const needs = `Honest rounding needs ${shareInWords(spread)}`;
   const nearest = Number.isFinite(nearestWrong)
-    ? `; the nearest wrong working lies ${percent(nearestWrong)} away.`
+    ? `; the nearest wrong working lies ${shareInWords(nearestWrong)} away.`
     : '; no wrong working is near.';
   if (tidy === null || tidy / 100 >= nearestWrong) {
     return { percent: null, verdict: 'impossible', reason: `${needs}${nearest}` };
@@ -41,7 +40,15 @@ export function recommendBand(question: BandQuestion): PartScale['recommended'] 
     return { percent: tidy, verdict: 'tooTight', reason: `${needs}, more than the band gives${nearest}` };
   }
   if (own > (WIDE * tidy) / 100) {
-    return { percent: tidy, verdict: 'wide', reason: `${needs}; the band gives ${percent(own)}${nearest}` };
+    return {
+      percent: tidy,
+      verdict: 'wide',
+      reason: `${needs}; the band gives ${shareInWords(own)}${nearest}`,
+    };
   }
-  return { percent: tidy, verdict: 'sound', reason: `${needs}; the band gives ${percent(own)}${nearest}` };
+  return {
+    percent: tidy,
+    verdict: 'sound',
+    reason: `${needs}; the band gives ${shareInWords(own)}${nearest}`,
+  };
 }

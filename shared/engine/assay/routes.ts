@@ -55,6 +55,15 @@ export function statedValues(context: AssayContext, part: AssayPart): StatedValu
     });
 }
 
+/** Nobody rounds on the way to a whole number to fewer figures than this; common practice. */
+const LEAST_ROUTE_FIGURES = 3;
+
+/** The figures that a candidate keeps on the way: the part's own, and enough to reach a whole number. */
+export function routeFigures({ part }: AssayPart): number {
+  const exact = part.answer.band.kind === 'absolute' && part.answer.band.plusMinus === 0;
+  return exact ? Math.max(LEAST_ROUTE_FIGURES, part.answer.figures) : part.answer.figures;
+}
+
 /** Every route of a part's working: which results are rounded, which constants and stated values are taken. */
 export function routesOf(context: AssayContext, part: AssayPart): Route[] {
   const whole = new Set(
@@ -82,7 +91,7 @@ export function followRoute(
   route: Route,
   block: BlockValues,
 ): Float64Array {
-  const figures = part.part.answer.figures;
+  const figures = routeFigures(part);
   const pinned = new Map<string, Float64Array>();
   for (const { name, round } of route.stated) {
     const column = block.columns.get(name);
@@ -111,9 +120,11 @@ export function routeInWords(route: Route, part: AssayPart): string {
   }
   const rounded = route.rounded.filter((name) => !route.stated.some((taken) => taken.name === name));
   if (rounded.length > 0) {
-    pieces.push(`rounding ${list(rounded.map((name) => `“${name}”`))} to ${figures} figures on the way`);
+    pieces.push(
+      `rounding ${list(rounded.map((name) => `“${name}”`))} to ${routeFigures(part)} figures on the way`,
+    );
   }
   if (route.constants === 'dataSheet') pieces.push('using the data sheet’s constants');
   if (pieces.length === 0) pieces.push('carrying everything in full');
-  return `${pieces.join(', ')}, and rounding the answer to ${figures} figures`;
+  return `${pieces.join(', ')}, and rounding the answer to ${figures} ${figures === 1 ? 'figure' : 'figures'}`;
 }

@@ -30,6 +30,10 @@ v = 2 * Va / (B * r)`,
         { name: 'v', symbol: 'v', unit: 'm s^-1', figures: 3, role: 'speed' },
       ],
       assumptions: ['uniformField', 'fromRest'],
+      acceptedCautions: {
+        'few-answers:charge':
+          'The item asks for a constant, so the answers stay together; the givens and the working differ on every draw.',
+      },
       parts: [
         {
           id: 'circle',

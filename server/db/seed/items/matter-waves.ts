@@ -104,7 +104,14 @@ lambda = h / (m_n * v)`,
       quantities: [
         { name: 'Ek', symbol: 'E_k', unit: 'eV', role: 'kineticEnergy', set: 'neutron' },
         { name: 'v', symbol: 'v', unit: 'm s^-1', figures: 3, role: 'speed', set: 'neutron' },
-        { name: 'lambda', symbol: '\\lambda', unit: 'nm', figures: 3, role: 'deBroglieWavelength', set: 'neutron' },
+        {
+          name: 'lambda',
+          symbol: '\\lambda',
+          unit: 'nm',
+          figures: 3,
+          role: 'deBroglieWavelength',
+          set: 'neutron',
+        },
       ],
       parts: [
         {

@@ -20,7 +20,8 @@ E = h * c / lambda
 Ek = E - phi
 Vs = Ek / e
 f0 = phi / h
-require(Ek > 1.2 eV)`,
+require(Ek > 1.2 eV)
+require(abs(Ek / phi - 1) > 0.05)`,
       quantities: [
         { name: 'lambda', symbol: '\\lambda', unit: 'nm', role: 'wavelength' },
         { name: 'phi', symbol: '\\phi', unit: 'eV', role: 'workFunction' },
