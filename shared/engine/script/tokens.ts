@@ -14,7 +14,7 @@ export interface Token {
 }
 
 const LEXEME =
-  /(?<newline>\r\n|[\n\r])|(?<space>[ \t\u00A0\u2009\u202F]+)|(?<comment>\/\/[^\n\r]*)|(?<number>(?:\d+\.?\d*|\.\d+)(?:[eE][+\-−]?\d+)?)|(?<superscript>[⁺⁻]?[⁰¹²³⁴⁵⁶⁷⁸⁹]+)|(?<name>[°º%]|[\p{L}_][\p{L}\p{M}\p{N}_]*)|(?<operator>\*\*|<=|>=|==|!=|[+\-−–*×·⋅/÷^<>≤≥≠?:])|(?<assign>=)|(?<open>[([])|(?<close>[)\]])|(?<comma>,)/uy;
+  /(?<newline>\r\n|[\n\r])|(?<space>[ \t\u00A0\u2009\u202F]+)|(?<comment>\/\/[^\n\r]*)|(?<number>(?:\d+\.?\d*|\.\d+)(?:[eE][+\-−]?\d+)?)|(?<superscript>[⁺⁻]?[⁰¹²³⁴⁵⁶⁷⁸⁹]+)|(?<name>[°º%]|[\p{L}_][\p{L}\p{M}\p{Nd}_₀-₉]*)|(?<operator>\*\*|<=|>=|==|!=|[+\-−–*×·⋅/÷^<>≤≥≠?:])|(?<assign>=)|(?<open>[([])|(?<close>[)\]])|(?<comma>,)/uy;
 
 const OPERATOR_SPELLINGS: ReadonlyMap<string, string> = new Map([
   ['−', '-'],

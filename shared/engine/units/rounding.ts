@@ -75,7 +75,7 @@ function roundInDecade(x: number, magnitude: number, figures: number, decade: De
     else if (way === 'quotient') result = rounded * scale.high;
     else result = nearestProduct(rounded, inverse);
   }
-  if (result !== result) return Number(x.toPrecision(figures));
+  if (Number.isNaN(result)) return Number(x.toPrecision(figures));
   return x < 0 ? -result : result;
 }
 
@@ -113,7 +113,7 @@ export function roundColumnToFigures(
     const magnitude = x < 0 ? -x : x;
     if (!(magnitude >= low && magnitude < high)) {
       exponent = neighbouringExponent(magnitude, exponent);
-      if (exponent !== exponent) {
+      if (Number.isNaN(exponent)) {
         low = high = Infinity;
         out[index] = roundToFigures(x, figures);
         continue;
@@ -124,14 +124,15 @@ export function roundColumnToFigures(
       isProduct = decade.way === 'product';
       scale = decade.scale.high;
     }
-    // Everyday sizes, in as few steps as can be; all else goes the general way.
-    const scaled = magnitude * scale;
-    const rounded = scaled + WHOLE - WHOLE;
-    const rest = scaled - rounded;
-    if (!isProduct || rest > clear || rest < -clear) {
+    if (!isProduct) {
       out[index] = roundInDecade(x, magnitude, figures, decade);
       continue;
     }
+    // Everyday sizes, in as few steps as can be.
+    const scaled = magnitude * scale;
+    let rounded = scaled + WHOLE - WHOLE;
+    const rest = scaled - rounded;
+    if (rest > clear || rest < -clear) rounded = roundProductNearHalf(magnitude, decade.scale, scaled);
     const result = rounded / scale;
     out[index] = x < 0 ? -result : result;
   }
