@@ -2,15 +2,14 @@ import type { Distribution, ItemContent, Quantity } from '#shared/engine/index.t
 import type { QuantityRow } from '#shared/contracts/checking.ts';
 import { quantityOf } from '../draft/edit-content.ts';
 import { NumberInput } from '../inputs/NumberInput.tsx';
-import type { RoleOption } from './choose-role.ts';
 import { DistributionStrip, printedNumber } from './DistributionStrip.tsx';
 import { RoleField } from './RoleField.tsx';
+import { rolesFor } from './roles-for.ts';
 
 interface QuantitiesTableProps {
   rows: readonly QuantityRow[];
   content: ItemContent;
   distributions: readonly Distribution[];
-  roles: readonly RoleOption[];
   readOnly: boolean;
   onChange: (name: string, change: Partial<Quantity>, field: string) => void;
   /** Called with the line on which a name gets its value. */
@@ -25,7 +24,7 @@ const KINDS: Readonly<Record<QuantityRow['kind'], string>> = {
 
 /** Every named value of the script: how it prints, what it stands for, its value now and its spread. */
 export function QuantitiesTable(props: QuantitiesTableProps) {
-  const { rows, content, distributions, roles, readOnly, onChange, onVisitLine } = props;
+  const { rows, content, distributions, readOnly, onChange, onVisitLine } = props;
   if (rows.length === 0) {
     return <p className="text-muted">The values appear here as soon as the script gives one a name.</p>;
   }
@@ -96,7 +95,7 @@ export function QuantitiesTable(props: QuantitiesTableProps) {
                   <RoleField
                     label={`What ${row.name} stands for`}
                     role={quantity.role}
-                    options={roles}
+                    options={rolesFor(row.unit)}
                     disabled={readOnly}
                     onChange={(role) => onChange(row.name, { role }, 'role')}
                   />
