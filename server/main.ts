@@ -30,24 +30,39 @@ function drain(server: Server): Promise<void> {
   });
 }
 
-const settings = readSettings(process.env);
-const context = createContext(settings);
-const { app } = createApp(context);
-const server = createServer(app);
-// Longer than a proxy in front keeps its connections, so that none is cut under a request.
-server.keepAliveTimeout = 65_000;
-await listen(server, settings.port, settings.host);
-const stopHousekeeping = startHousekeeping(context);
-const { port } = server.address() as AddressInfo;
-context.logger.info({ host: settings.host, port }, 'the server is ready');
+/** Serves until a signal asks for the end, then stops in order: requests, jobs, threads, database. */
+async function serve(): Promise<void> {
+  const settings = readSettings(process.env);
+  const context = createContext(settings);
+  const { app } = createApp(context);
+  const server = createServer(app);
+  // Longer than a proxy in front keeps its connections, so that none is cut under a request.
+  server.keepAliveTimeout = 65_000;
+  try {
+    await listen(server, settings.port, settings.host);
+  } catch (error) {
+    await context.close();
+    throw error;
+  }
+  const stopHousekeeping = startHousekeeping(context);
+  const { port } = server.address() as AddressInfo;
+  context.logger.info({ host: settings.host, port }, 'the server is ready');
 
-let stopping = false;
-async function stop(signal: string): Promise<void> {
-  if (stopping) return;
-  stopping = true;
-  context.logger.info({ signal }, 'the server is stopping');
-  await drain(server);
-  await stopHousekeeping();
-  await context.close();
+  let stopping = false;
+  const stop = async (signal: string) => {
+    if (stopping) return;
+    stopping = true;
+    context.logger.info({ signal }, 'the server is stopping');
+    await drain(server);
+    await stopHousekeeping();
+    await context.close();
+  };
+  for (const signal of ['SIGINT', 'SIGTERM'] as const) process.on(signal, () => void stop(signal));
 }
-for (const signal of ['SIGINT', 'SIGTERM'] as const) process.on(signal, () => void stop(signal));
+
+try {
+  await serve();
+} catch (error) {
+  console.error(`The server could not start. ${error instanceof Error ? error.message : String(error)}`);
+  process.exitCode = 1;
+}
