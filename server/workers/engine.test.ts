@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 
-import { type ItemContent, itemContentSchema } from '#shared/engine/index.ts';
+import { assayReportSchema, type ItemContent, itemContentSchema } from '#shared/engine/index.ts';
 import { sampleContent } from '#tests/support/factories.ts';
 
 import { createEngine } from './engine.ts';
@@ -85,6 +85,38 @@ describe('viewing a draw', () => {
     );
     expect(misfit.diagnostics.map(({ field }) => field)).toEqual(['parts.0.answer.slips.0.expression']);
   });
+});
+
+describe('assaying', () => {
+  it('gives a report that the schema takes, the same every time', async () => {
+    const report = await engine.assay(content);
+    expect(assayReportSchema.parse(report)).toEqual(report);
+    expect(report).toMatchObject({
+      gridSize: 16,
+      exhaustive: true,
+      drawsAssayed: 16,
+      coverage: 'all 16 draws',
+    });
+    expect(report.findings.filter((finding) => finding.severity === 'blocker')).toEqual([]);
+    expect(await engine.assay(content)).toEqual(report);
+  });
+
+  it('finds a script that does not compile', async () => {
+    const { findings } = await engine.assay(edited({ script: 'Va = 1 V + 1 m' }));
+    expect(findings[0]).toMatchObject({ severity: 'blocker', place: { span: { line: 1 } } });
+  });
+
+  it('leaves the live sheet free while it works', async () => {
+    // A million draws, which take a good part of a second or more.
+    const large = edited({
+      script: 'Va = draw(100 V, 10099 V, 1 V)\nk = whole(1, 100)\nW = e * Va * k / k',
+    });
+    let done = false;
+    const assay = engine.assay(large).finally(() => (done = true));
+    await engine.viewDraw(content, 1);
+    expect(done).toBe(false);
+    expect((await assay).drawsAssayed).toBe(1_000_000);
+  }, 30_000);
 });
 
 describe('marking a reviewer’s working', () => {

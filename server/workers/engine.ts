@@ -1,7 +1,7 @@
 import { availableParallelism } from 'node:os';
 
 import type { DrawView } from '#shared/contracts/checking.ts';
-import type { AssayReport, ItemContent } from '#shared/engine/index.ts';
+import type { AssayReport, FigureFacts, ItemContent } from '#shared/engine/index.ts';
 import type { StoredFigure } from '#shared/sheet/build-item.ts';
 
 import { createTaskPool, type TaskLimits, type TaskPool } from './task-pool.ts';
@@ -15,8 +15,11 @@ interface TaskOptions {
 
 /** The checker in its own threads; every method rejects with AppError timedOut or busy when it must. */
 export interface Engine {
-  /** The full check of one revision's content; at most 20 s. */
-  assay: (content: ItemContent, options?: TaskOptions) => Promise<AssayReport>;
+  /** The full check of one revision's content with its figures; at most 20 s. */
+  assay: (
+    content: ItemContent,
+    options?: TaskOptions & { figures?: readonly FigureFacts[] },
+  ) => Promise<AssayReport>;
   /** Sheet, mark scheme, values and mistakes at one draw (null: the first kept one); at most 3 s. */
   viewDraw: (
     content: ItemContent,
@@ -74,7 +77,8 @@ export function createEngine({ threads, report }: EngineOptions): Engine {
   ): Promise<Result> => (await pool.run(task, payload, { ...limits, signal: options.signal })) as Result;
 
   return {
-    assay: (content, options) => ask(thorough, 'assay', content, ASSAY, options),
+    assay: (content, options) =>
+      ask(thorough, 'assay', { content, figures: options?.figures ?? [] }, ASSAY, options),
     buildPaper: (paper, options) => ask(thorough, 'buildPaper', paper, PAPER, options),
     viewDraw: (content, draw, figures = [], options) =>
       ask(quick, 'viewDraw', { content, draw, figures }, QUICK, options),

@@ -1,7 +1,13 @@
 import type { PaperFront } from '#shared/sheet/build-paper.ts';
 import type { StoredFigure } from '#shared/sheet/build-item.ts';
 import type { PaperScheme, PaperSheet } from '#shared/sheet/model.ts';
-import type { ItemContent, Verdict } from '#shared/engine/index.ts';
+import type { FigureFacts, ItemContent, Verdict } from '#shared/engine/index.ts';
+
+/** One revision's content to be checked in full, with what its figures hold. */
+export interface ContentToAssay {
+  content: ItemContent;
+  figures: readonly FigureFacts[];
+}
 
 /** A draw of an item to be looked at; null asks for the first that every `require` keeps. */
 export interface DrawToView {
