@@ -2,6 +2,9 @@ import type { AppContext } from '../context.ts';
 import type { Authentication } from '../http/authentication.ts';
 import type { Route } from '../http/route.ts';
 import { deskRoutes } from './desk/routes.ts';
+import { checkingRoutes } from './checking/routes.ts';
+import { figureRoutes } from './figures/routes.ts';
+import { itemRoutes } from './items/routes.ts';
 import { peopleRoutes } from './people/routes.ts';
 import { recordRoutes } from './records/routes.ts';
 import { sessionRoutes } from './session/routes.ts';
@@ -12,6 +15,9 @@ export function sessionedRoutes(context: AppContext, authentication: Authenticat
   return [
     ...sessionRoutes(context, authentication),
     ...deskRoutes(context),
+    ...checkingRoutes(context),
+    ...figureRoutes(context),
+    ...itemRoutes(context),
     ...peopleRoutes(context),
     ...recordRoutes(context),
     ...topicRoutes(context),

@@ -43,6 +43,14 @@ export async function selectPeople(connection: Connection, onlyActive: boolean):
   return rows.map((row) => ({ ...row, roles: roles.get(row.id) ?? [] }));
 }
 
+/** One person with their roles; null when there is none. */
+export async function selectPerson(connection: Connection, personId: number): Promise<PersonRow | null> {
+  const [row] = await connection.select(columns).from(people).where(eq(people.id, personId));
+  if (row === undefined) return null;
+  const roles = await rolesOf(connection, [personId]);
+  return { ...row, roles: roles.get(personId) ?? [] };
+}
+
 /** One person with their roles, locked until the transaction ends; null when there is none. */
 export async function lockPerson(tx: Transaction, personId: number): Promise<PersonRow | null> {
   const [row] = await tx.select(columns).from(people).where(eq(people.id, personId)).for('update');

@@ -3,11 +3,18 @@ import { type Role, ROLES } from '#shared/domain/roles.ts';
 import { AppError } from '#shared/errors/app-error.ts';
 
 import type { AppContext } from '../../context.ts';
-import { inTransaction } from '../../db/client.ts';
+import { type Connection, inTransaction } from '../../db/client.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
 import { recordEvent } from '../records/record-event.ts';
-import { lockAdministrators, lockPerson, type PersonRow, replaceRoles, selectPeople } from './queries.ts';
+import {
+  lockAdministrators,
+  lockPerson,
+  type PersonRow,
+  replaceRoles,
+  selectPeople,
+  selectPerson,
+} from './queries.ts';
 
 function present(row: PersonRow): Person {
   return {
@@ -20,6 +27,13 @@ function present(row: PersonRow): Person {
     lastSeenAt: row.lastSeenAt?.toISOString() ?? null,
     version: row.version,
   };
+}
+
+/** One person with their roles; throws AppError notFound. */
+export async function personById(connection: Connection, personId: number): Promise<PersonRow> {
+  const person = await selectPerson(connection, personId);
+  if (person === null) throw new AppError('notFound', 'There is no such person.');
+  return person;
 }
 
 /** All people, by name. */

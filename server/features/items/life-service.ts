@@ -1,0 +1,221 @@
+import type { Item } from '#shared/contracts/items.ts';
+import { type ItemAction, itemTransition } from '#shared/domain/item-life.ts';
+import { worstSeverity } from '#shared/engine/index.ts';
+import { AppError } from '#shared/errors/app-error.ts';
+
+import type { AppContext } from '../../context.ts';
+import { inTransaction, type Transaction } from '../../db/client.ts';
+import { demand } from '../../http/demand.ts';
+import type { SignedIn } from '../../http/signed-in.ts';
+import { queueMail } from '../../jobs/queue-mail.ts';
+import { personById } from '../people/service.ts';
+import { recordEvent } from '../records/record-event.ts';
+import { isFresh } from './present.ts';
+import * as queries from './queries.ts';
+import { loadItem, readContent, requireItem, requireRevision, runAssay, subjectOf } from './service.ts';
+
+/** Asks the item's life for the next state; throws AppError notPossible with the reason why not. */
+export function nextState(state: Parameters<typeof itemTransition>[0], action: ItemAction) {
+  const transition = itemTransition(state, action);
+  if (!transition.possible) throw new AppError('notPossible', transition.reason);
+  return transition;
+}
+
+/** Begins a new revision with a copy of the latest content. */
+export async function startRevision(context: AppContext, actor: SignedIn, itemId: number): Promise<Item> {
+  return inTransaction(context.database, async (tx) => {
+    const item = await requireItem(tx, itemId, true);
+    demand(actor, 'item.edit', await subjectOf(tx, item, actor.id));
+    const revision = await requireRevision(tx, item.latestRevisionId);
+    const { newRevision, event } = nextState(revision.state, { kind: 'edit' });
+    if (newRevision) {
+      await queries.insertRevision(tx, {
+        itemId,
+        number: revision.number + 1,
+        authorId: actor.id,
+        content: readContent(revision),
+        contentHash: revision.contentHash,
+      });
+      await recordEvent(tx, {
+        event,
+        actor,
+        subjectType: 'item',
+        subjectId: itemId,
+        summary: `Began revision ${revision.number + 1} of ${item.code}.`,
+      });
+    }
+    return loadItem(tx, actor, itemId);
+  });
+}
+
+/** Assays the latest revision unless that was done and nothing has moved since; keeps the result. */
+async function freshAssay(context: AppContext, actor: SignedIn, itemId: number): Promise<void> {
+  const item = await requireItem(context.database, itemId);
+  const revision = await requireRevision(context.database, item.latestRevisionId);
+  const stored = await queries.selectNewestAssay(context.database, revision.id);
+  if (isFresh(stored, revision.contentHash)) return;
+  const { report, durationMs } = await runAssay(context, readContent(revision));
+  await inTransaction(context.database, async (tx) => {
+    await requireItem(tx, itemId, true);
+    await queries.insertAssay(tx, {
+      itemId,
+      revisionId: revision.id,
+      report,
+      durationMs,
+      requestedById: actor.id,
+      worst: worstSeverity(report.findings),
+      at: context.clock(),
+    });
+  });
+}
+
+interface Sending {
+  version: number;
+  note: string;
+  reviewerId: number | null;
+  dueOn: string | null;
+}
+
+async function requireReviewer(
+  tx: Transaction,
+  reviewerId: number,
+  subject: { authorIds?: readonly number[] },
+) {
+  const reviewer = await personById(tx, reviewerId);
+  if (!reviewer.active || !reviewer.roles.includes('reviewer')) {
+    throw new AppError('invalid', `${reviewer.name} is no reviewer.`, {
+      fields: [{ path: 'reviewerId', message: 'Choose a reviewer, or send the item to the queue.' }],
+    });
+  }
+  if (subject.authorIds?.includes(reviewerId)) {
+    throw new AppError('invalid', `${reviewer.name} wrote some of this item.`, {
+      fields: [{ path: 'reviewerId', message: 'Choose somebody who wrote none of it.' }],
+    });
+  }
+  return reviewer;
+}
+
+/**
+ * Sends the draft to a reviewer or to the queue. The assay is run first when it is stale; a blocker refuses.
+ * Throws AppError conflict for a stale version.
+ */
+export async function sendToReview(
+  context: AppContext,
+  actor: SignedIn,
+  itemId: number,
+  sending: Sending,
+): Promise<Item> {
+  const before = await requireItem(context.database, itemId);
+  demand(actor, 'item.send', await subjectOf(context.database, before, actor.id));
+  await freshAssay(context, actor, itemId);
+  const revisionBefore = await requireRevision(context.database, before.latestRevisionId);
+  const chosen = await context.engine.chooseDraw(readContent(revisionBefore), context.random());
+  return inTransaction(context.database, async (tx) => {
+    const item = await requireItem(tx, itemId, true);
+    const subject = await subjectOf(tx, item, actor.id);
+    demand(actor, 'item.send', subject);
+    const revision = await requireRevision(tx, item.latestRevisionId);
+    if (revision.version !== sending.version || revision.contentHash !== revisionBefore.contentHash) {
+      throw new AppError(
+        'conflict',
+        'This draft was changed elsewhere since you opened it. Look at it again.',
+        {
+          current: await loadItem(tx, actor, itemId),
+        },
+      );
+    }
+    const assay = await queries.selectNewestAssay(tx, revision.id);
+    const { state, event } = nextState(revision.state, {
+      kind: 'send',
+      assayFresh: isFresh(assay, revision.contentHash),
+      blockers: assay?.report.findings.filter((one) => one.severity === 'blocker').length ?? 0,
+    });
+    const reviewer =
+      sending.reviewerId === null ? null : await requireReviewer(tx, sending.reviewerId, subject);
+    const at = context.clock();
+    await queries.updateState(tx, { itemId, revisionId: revision.id, state, note: sending.note, at });
+    const reviewId = await queries.insertReview(tx, {
+      itemId,
+      revisionId: revision.id,
+      requestedById: actor.id,
+      reviewerId: sending.reviewerId,
+      draw: chosen.draw ?? 1,
+      note: sending.note,
+      dueOn: sending.dueOn,
+    });
+    if (reviewer !== null) {
+      await queueMail(tx, {
+        kind: 'reviewRequested',
+        person: reviewer,
+        payload: { reviewId, itemCode: item.code, requestedBy: actor.name, dueOn: sending.dueOn },
+        dedupeKey: `reviewRequested:${reviewId}`,
+      });
+    }
+    await recordEvent(tx, {
+      event,
+      actor,
+      subjectType: 'item',
+      subjectId: itemId,
+      summary: `Sent ${item.code} revision ${revision.number} to ${reviewer?.name ?? 'the review queue'}.`,
+    });
+    return loadItem(tx, actor, itemId);
+  });
+}
+
+/** Takes the item back from review; its review ends without a decision on the merits. */
+export async function recallItem(
+  context: AppContext,
+  actor: SignedIn,
+  itemId: number,
+  reason: string,
+): Promise<Item> {
+  return inTransaction(context.database, async (tx) => {
+    const item = await requireItem(tx, itemId, true);
+    demand(actor, 'item.recall', await subjectOf(tx, item, actor.id));
+    const revision = await requireRevision(tx, item.latestRevisionId);
+    const { state, event } = nextState(revision.state, { kind: 'recall' });
+    const at = context.clock();
+    await queries.updateState(tx, { itemId, revisionId: revision.id, state, at });
+    await queries.closeRecalledReview(tx, revision.id, reason, at);
+    await recordEvent(tx, {
+      event,
+      actor,
+      subjectType: 'item',
+      subjectId: itemId,
+      summary: `Took ${item.code} revision ${revision.number} back from review.`,
+      after: { reason },
+    });
+    return loadItem(tx, actor, itemId);
+  });
+}
+
+/** Withdraws the item: no new paper can take it. Papers that hold a revision keep it. */
+export async function withdrawItem(
+  context: AppContext,
+  actor: SignedIn,
+  itemId: number,
+  reason: string,
+): Promise<Item> {
+  return inTransaction(context.database, async (tx) => {
+    const item = await requireItem(tx, itemId, true);
+    demand(actor, 'item.withdraw', await subjectOf(tx, item, actor.id));
+    const revision = await requireRevision(tx, item.latestRevisionId);
+    const { state, event } = nextState(revision.state, { kind: 'withdraw' });
+    await queries.updateState(tx, {
+      itemId,
+      revisionId: revision.id,
+      state,
+      note: reason,
+      at: context.clock(),
+    });
+    await recordEvent(tx, {
+      event,
+      actor,
+      subjectType: 'item',
+      subjectId: itemId,
+      summary: `Withdrew ${item.code}.`,
+      after: { reason },
+    });
+    return loadItem(tx, actor, itemId);
+  });
+}
