@@ -62,3 +62,9 @@ export function countSentence(findings: readonly Finding[], content: ItemContent
   });
   return counts.length === 0 ? 'Nothing found' : counts.join(', ');
 }
+
+/** The draw that shows the most serious finding worst; null when no finding names one. */
+export function worstDrawOf(findings: readonly Finding[]): number | null {
+  const ordered = groupFindings(findings).flatMap((group) => group.findings);
+  return ordered.find((finding) => finding.worstDraw !== null)?.worstDraw ?? null;
+}

@@ -1,0 +1,44 @@
+import type { Review } from '#shared/contracts/reviews.ts';
+
+const STAGES: Readonly<Record<Review['stage'], string>> = {
+  waiting: 'Waiting for a reviewer',
+  working: 'Working, answers hidden',
+  revealed: 'Answers shown',
+  decided: 'Decided',
+};
+const DECISIONS = {
+  approved: 'Approved',
+  returned: 'Returned to the writer',
+  recalled: 'Taken back by the writer',
+} as const;
+
+const day = new Intl.DateTimeFormat('en-GB', { dateStyle: 'medium' });
+
+/** What is under review, at which stage, for whom and until when; and the writer's note. */
+export function ReviewHeader({ review }: { review: Review }) {
+  const stage = review.decision === null ? STAGES[review.stage] : DECISIONS[review.decision];
+  return (
+    <header className="mb-6">
+      <h1 className="text-xl font-semibold">
+        <span className="font-mono text-base font-normal text-muted">{review.itemCode}</span>{' '}
+        {review.itemTitle}
+      </h1>
+      <p className="flex flex-wrap gap-x-4 text-sm">
+        <span>{stage}</span>
+        <span className="text-muted">Revision {review.revision}</span>
+        <span className="text-muted">{review.topic.name}</span>
+        <span className="text-muted">{review.marks === 1 ? '1 mark' : `${review.marks} marks`}</span>
+        <span className="text-muted">
+          sent by {review.requestedBy.name}, {day.format(new Date(review.requestedAt))}
+        </span>
+        {review.dueOn !== null && <span>wanted by {day.format(new Date(review.dueOn))}</span>}
+      </p>
+      {review.note !== '' && <p className="mt-2 max-w-prose">{review.note}</p>}
+      {review.decision !== null && review.decisionReason !== '' && (
+        <p className="notice">
+          <span className="font-semibold">{stage}.</span> {review.decisionReason}
+        </p>
+      )}
+    </header>
+  );
+}
