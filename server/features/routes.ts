@@ -7,6 +7,7 @@ import { figureRoutes } from './figures/routes.ts';
 import { itemRoutes } from './items/routes.ts';
 import { peopleRoutes } from './people/routes.ts';
 import { recordRoutes } from './records/routes.ts';
+import { reviewRoutes } from './reviews/routes.ts';
 import { sessionRoutes } from './session/routes.ts';
 import { topicRoutes } from './topics/routes.ts';
 
@@ -20,6 +21,7 @@ export function sessionedRoutes(context: AppContext, authentication: Authenticat
     ...itemRoutes(context),
     ...peopleRoutes(context),
     ...recordRoutes(context),
+    ...reviewRoutes(context),
     ...topicRoutes(context),
   ];
 }

@@ -1,7 +1,6 @@
 import { type AssayReport, assayItem } from '#shared/engine/index.ts';
 
 import { dispatcher } from './dispatcher.ts';
-import { assay } from './engine-tasks/assay.ts';
 import { buildPaper, chooseDraw } from './engine-tasks/build-paper.ts';
 import { markWorking } from './engine-tasks/mark-working.ts';
 import { viewDraw } from './engine-tasks/view-draw.ts';

@@ -49,7 +49,7 @@ export async function startRevision(context: AppContext, actor: SignedIn, itemId
 }
 
 /** Assays the latest revision unless that was done and nothing has moved since; keeps the result. */
-async function freshAssay(context: AppContext, actor: SignedIn, itemId: number): Promise<void> {
+export async function freshAssay(context: AppContext, actor: SignedIn, itemId: number): Promise<void> {
   const item = await requireItem(context.database, itemId);
   const revision = await requireRevision(context.database, item.latestRevisionId);
   const stored = await queries.selectNewestAssay(context.database, revision.id);
@@ -68,6 +68,9 @@ async function freshAssay(context: AppContext, actor: SignedIn, itemId: number):
     });
   });
 }
+
+/** Moves the item and its latest revision to a state that its life allows. */
+export const moveItem = queries.updateState;
 
 interface Sending {
   version: number;

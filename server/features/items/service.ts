@@ -64,6 +64,28 @@ export function readContent(revision: queries.RevisionRow): ItemContent {
   return itemContentSchema.parse(revision.content);
 }
 
+export const authorIdsOf = queries.selectAuthorIds;
+
+/** The newest assay of a revision with whether it is stale; null when there is none. */
+export async function newestAssayOf(connection: Connection, revisionId: number): Promise<StoredAssay | null> {
+  const assay = await queries.selectNewestAssay(connection, revisionId);
+  if (assay === null) return null;
+  const revision = await requireRevision(connection, revisionId);
+  return presentAssay(assay, revision.contentHash);
+}
+
+/** The approved revision before `number`, to show what has changed since; null for a first one. */
+export async function previousApproved(
+  connection: Connection,
+  itemId: number,
+  number: number,
+): Promise<{ revision: number; content: ItemContent } | null> {
+  const earlier = (await queries.selectRevisions(connection, itemId)).find(
+    (row) => row.number < number && row.state === 'approved',
+  );
+  return earlier === undefined ? null : { revision: earlier.number, content: readContent(earlier) };
+}
+
 export async function listItems(context: AppContext, actor: SignedIn, query: ItemQuery) {
   const { rows, total } = await queries.selectItemPage(context.database, query);
   const maySeePapers = permit(actor, 'paper.list').allowed;
