@@ -26,10 +26,10 @@ describe('the settings', () => {
   });
 
   it.each([
-    ['https://bank.example', true],
-    ['http://bank.example', false],
-  ])('mark cookies as secure when browsers reach the server at %s: %s', (origin, secure) => {
-    expect(readSettings({ ...least, PUBLIC_ORIGIN: origin }).secureCookies).toBe(secure);
+    ['https://bank.example', true, 1],
+    ['http://bank.example', false, false],
+  ])('for %s mark cookies as secure: %s, and trust proxies: %s', (origin, secureCookies, trustProxy) => {
+    expect(readSettings({ ...least, PUBLIC_ORIGIN: origin })).toMatchObject({ secureCookies, trustProxy });
   });
 
   it.each([

@@ -16,8 +16,11 @@ const environmentSchema = z.object({
   SESSION_SECRET: z.string({ error: 'must be set' }).min(32, 'must have at least 32 characters'),
   /** Where browsers reach the server; cookies are marked secure when it is https. */
   PUBLIC_ORIGIN: z.url().optional(),
-  /** Proxies in front that may name the client's address: a count, or addresses as Express takes them. */
-  TRUST_PROXY: z.string().default('false'),
+  /**
+   * Proxies in front that may name the client's address: a count, or addresses as Express takes them. An https
+   * origin means that one stands in front, since the server itself speaks http alone.
+   */
+  TRUST_PROXY: z.string().optional(),
   /** Folder of the built client; nothing is served but the API when it is empty. */
   STATIC_DIR: z.string().optional(),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
@@ -61,6 +64,7 @@ export function readSettings(environment: Readonly<Record<string, string | undef
     throw new Error(`The environment is not right. ${problems.join('; ')}`);
   }
   const values = parsed.data;
+  const https = values.PUBLIC_ORIGIN?.startsWith('https:') ?? false;
   return {
     environment: values.NODE_ENV,
     host: values.HOST,
@@ -69,8 +73,8 @@ export function readSettings(environment: Readonly<Record<string, string | undef
     databaseConnections: values.DATABASE_CONNECTIONS,
     sessionSecret: values.SESSION_SECRET,
     publicOrigin: values.PUBLIC_ORIGIN ?? null,
-    secureCookies: values.SECURE_COOKIES ?? values.PUBLIC_ORIGIN?.startsWith('https:') ?? false,
-    trustProxy: readTrustProxy(values.TRUST_PROXY),
+    secureCookies: values.SECURE_COOKIES ?? https,
+    trustProxy: readTrustProxy(values.TRUST_PROXY ?? (https ? '1' : 'false')),
     staticFolder: values.STATIC_DIR ?? null,
     logLevel: values.LOG_LEVEL,
     engineWorkers: values.ENGINE_WORKERS,
