@@ -46,6 +46,8 @@ export const workingSchema = z.object({
   remark: z.string(),
   /** The reviewer holds to this working against the checker. */
   disputed: z.boolean(),
+  /** What made the reviewer agree after the reveal; null while nothing did. */
+  settledReason: z.string().nullable(),
   createdAt: instant,
 });
 export type Working = z.infer<typeof workingSchema>;

@@ -39,8 +39,9 @@ export function presentWorking(row: WorkingRow): Working {
     attempt: row.attempt,
     text: row.text,
     agrees: row.agrees,
-    remark: row.settledReason === null ? row.remark : `Settled: ${row.settledReason}`,
-    disputed: row.disputed && row.settledReason === null,
+    remark: row.remark,
+    disputed: row.disputed,
+    settledReason: row.settledReason,
     createdAt: row.createdAt.toISOString(),
   };
 }

@@ -42,9 +42,12 @@ export function ReviewReveal({ review, canDecide, onSettle, slots }: ReviewRevea
                   <p>
                     Mine: {part.tries.map((working) => working.text).join(', then ')}{' '}
                     <span className={unsettled ? 'text-brass' : 'text-accent'}>
-                      {unsettled ? '✕ does not agree' : '✓ agrees'}
+                      {unsettled ? '✕ does not agree' : part.state === 'settled' ? '✓ settled' : '✓ agrees'}
                     </span>
                   </p>
+                )}
+                {part.tries.at(-1)?.settledReason != null && (
+                  <p className="text-sm">Settled: {part.tries.at(-1)?.settledReason}</p>
                 )}
                 {canDecide && unsettled && <SettlementForm part={part} onSettle={onSettle} />}
                 {scale !== undefined &&

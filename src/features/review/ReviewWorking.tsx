@@ -15,7 +15,6 @@ interface ReviewWorkingProps {
 export function ReviewWorking({ review, busy, onTry, onDispute, onReveal, onRelease }: ReviewWorkingProps) {
   const parts = partsProgress(review);
   const hindrance = revealHindrance(parts);
-  const open = parts.filter((part) => part.state === 'open' && part.tries.length > 0);
   return (
     <section aria-labelledby="my-working">
       <h2 id="my-working" className="section-title">
@@ -47,12 +46,6 @@ export function ReviewWorking({ review, busy, onTry, onDispute, onReveal, onRele
         {hindrance !== null && (
           <p id="reveal-hindrance" className="text-sm text-muted">
             {hindrance}
-          </p>
-        )}
-        {hindrance === null && open.length > 0 && (
-          <p className="text-sm text-brass">
-            A try is left in {open.map((part) => `(${part.letter})`).join(', ')}; there is none after the
-            answers are shown.
           </p>
         )}
       </div>

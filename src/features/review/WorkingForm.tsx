@@ -93,7 +93,7 @@ export function WorkingForm({ part, busy, onTry, onDispute }: WorkingFormProps) 
       ) : (
         <p role="status">{STATES[part.state]}</p>
       )}
-      {part.state === 'disagrees' && (
+      {(part.state === 'disagrees' || (part.state === 'open' && part.tries.length > 0)) && (
         <button type="button" className="link" disabled={busy} onClick={() => onDispute(part.partId)}>
           I hold to my working
         </button>

@@ -11,6 +11,7 @@ const working = (partId: string, attempt: number, agrees: boolean, disputed = fa
   agrees,
   remark: '',
   disputed,
+  settledReason: null,
   createdAt: '2026-03-02T10:00:00.000Z',
 });
 const finding = (key: string, severity: Finding['severity']): Finding => ({
@@ -104,13 +105,23 @@ describe('the reviewer’s own working', () => {
     expect(revealHindrance(partsProgress(review([working('p', 1, false)])))).toBe(
       'Part (c) has no working yet.',
     );
+    expect(revealHindrance(partsProgress(review([working('p', 1, false), working('q', 1, true)])))).toBe(
+      'Try (a) once more, or hold to your working.',
+    );
     expect(
-      revealHindrance(partsProgress(review([working('p', 1, false), working('q', 1, true)]))),
+      revealHindrance(partsProgress(review([working('p', 1, false, true), working('q', 1, true)]))),
     ).toBeNull();
   });
 });
 
 describe('approval', () => {
+  it('is possible after a disagreement that the reviewer settled with a reason', () => {
+    const settled = { ...working('p', 2, false, true), settledReason: 'I had left out the unit.' };
+    const open = review([working('p', 1, false), settled, working('q', 1, true)]);
+    expect(partsProgress(open)[0]?.state).toBe('settled');
+    expect(approvalHindrances(open, {})).toEqual([]);
+  });
+
   const agreed = [working('p', 1, true), working('q', 1, true)];
 
   it('waits for every caution to be accepted by writer or reviewer', () => {

@@ -13,7 +13,8 @@ export interface PartProgress {
 
 /**
  * The state of each numeric part's working: `open` while a try is left, `disagrees` when none is, `disputed`
- * when the reviewer holds to it, `agrees` once a try came out right.
+ * when the reviewer holds to it, `agrees` once a try came out right, `settled` when the reviewer came to agree
+ * after the reveal.
  */
 export function partsProgress(review: Pick<Review, 'numericParts' | 'workings'>): PartProgress[] {
   return review.numericParts.map(({ partId, letter, unit }) => {
@@ -22,18 +23,16 @@ export function partsProgress(review: Pick<Review, 'numericParts' | 'workings'>)
       .sort((a, b) => a.attempt - b.attempt);
     const last = tries.at(-1);
     const triesLeft = Math.max(0, MAX_ATTEMPTS - tries.length);
-    const state =
-      last === undefined
-        ? 'open'
-        : last.agrees
-          ? 'agrees'
-          : tries.some((working) => working.disputed)
-            ? 'disputed'
-            : triesLeft > 0
-              ? 'open'
-              : 'disagrees';
-    return { partId, letter, unit, tries, triesLeft, state };
+    return { partId, letter, unit, tries, triesLeft, state: stateOf(last, triesLeft) };
   });
+}
+
+function stateOf(last: Working | undefined, triesLeft: number): PartProgress['state'] {
+  if (last === undefined) return 'open';
+  if (last.agrees) return 'agrees';
+  if (last.settledReason !== null) return 'settled';
+  if (last.disputed) return 'disputed';
+  return triesLeft > 0 ? 'open' : 'disagrees';
 }
 
 const letters = (parts: readonly PartProgress[]): string =>
@@ -42,10 +41,11 @@ const letters = (parts: readonly PartProgress[]): string =>
 /** What still stands before the answers can be shown, as a sentence; null when nothing does. */
 export function revealHindrance(parts: readonly PartProgress[]): string | null {
   const unworked = parts.filter((part) => part.tries.length === 0);
-  if (unworked.length === 0) return null;
-  return unworked.length === 1
-    ? `Part ${letters(unworked)} has no working yet.`
-    : `Parts ${letters(unworked)} have no working yet.`;
+  const undecided = parts.filter((part) => part.state === 'open' && part.tries.length > 0);
+  if (unworked.length === 1) return `Part ${letters(unworked)} has no working yet.`;
+  if (unworked.length > 1) return `Parts ${letters(unworked)} have no working yet.`;
+  if (undecided.length === 0) return null;
+  return `Try ${letters(undecided)} once more, or hold to your working.`;
 }
 
 /** Cautions that neither the writer nor (in `accepted`) the reviewer has accepted with a reason. */
