@@ -37,7 +37,7 @@ function bodyReader(guard: Guard): RequestHandler {
       if (hasBody && !request.is('application/json')) {
         throw new AppError('unsupportedFile', 'Send this request as application/json.');
       }
-      void json(request, response, next);
+      json(request, response, next);
     };
   }
   const upload = multer({

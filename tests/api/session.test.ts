@@ -33,7 +33,7 @@ describe('signing in', () => {
 
   it('takes an address in whatever case it is written', async () => {
     const { person } = await app.signIn(['writer']);
-    const reply = await app.visitor().signIn(`${person.email.toUpperCase()}`, PASSWORD);
+    const reply = await app.visitor().signIn(person.email.toUpperCase(), PASSWORD);
     expect(reply.status).toBe(200);
   });
 

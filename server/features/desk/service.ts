@@ -25,12 +25,12 @@ type OwnItem = Awaited<ReturnType<typeof selectOwnItems>>[number];
 type ReviewEntry = Awaited<ReturnType<typeof selectReviewsFor>>[number];
 
 function returnedEntry(row: OwnItem): DeskEntry {
-  const recalled = row.decision === 'recalled' || row.decidedBy === null;
+  const byReviewer = row.decision === 'returned' && row.decidedBy !== null;
   return {
     path: `/items/${row.id}`,
     code: row.code,
     title: row.title,
-    reason: recalled ? 'taken back from review' : `returned by ${row.decidedBy}`,
+    reason: byReviewer ? `returned by ${row.decidedBy}` : 'taken back from review',
     since: (row.decidedAt ?? row.updatedAt).toISOString(),
     dueOn: null,
   };

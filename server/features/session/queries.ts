@@ -44,8 +44,13 @@ export async function findActivePerson(database: Database, personId: number): Pr
     .orderBy(personRoles.role);
   const [first] = rows;
   if (first === undefined) return null;
-  const { role: _role, ...person } = first;
-  return { ...person, roles: rows.flatMap((row) => (row.role === null ? [] : [row.role])) };
+  return {
+    id: first.id,
+    name: first.name,
+    email: first.email,
+    lastSeenAt: first.lastSeenAt,
+    roles: rows.flatMap((row) => (row.role === null ? [] : [row.role])),
+  };
 }
 
 /** Notes when a person was last here. */

@@ -47,8 +47,8 @@ async function find(context: AppContext, personId: number, sessionId: string): P
   if (person.lastSeenAt === null || now.getTime() - person.lastSeenAt.getTime() > SEEN_AFTER) {
     await noteSeen(context.database, personId, now);
   }
-  const { lastSeenAt: _lastSeenAt, ...known } = person;
-  return { ...known, sessionRef: sessionReference(sessionId) };
+  const { id, name, email, roles } = person;
+  return { id, name, email, roles, sessionRef: sessionReference(sessionId) };
 }
 
 /** Who people are, for the sessions of every request. */
