@@ -5,6 +5,7 @@ import { type Logger, pino } from 'pino';
 import type { Settings } from './config/settings.ts';
 import { type Database, openDatabase } from './db/client.ts';
 import { createEngine, type Engine } from './workers/engine.ts';
+import { createExporter, type Exporter } from './workers/exporter.ts';
 
 /** Everything that the server's features stand on; made once, handed down. */
 export interface AppContext {
@@ -12,6 +13,8 @@ export interface AppContext {
   database: Database;
   /** The checker, in its own threads. */
   engine: Engine;
+  /** Writes documents, in a thread of its own. */
+  exporter: Exporter;
   logger: Logger;
   /** The time now. */
   clock: () => Date;
@@ -30,21 +33,21 @@ export function createContext(settings: Settings, overrides: Partial<AppContext>
   const database = overrides.database ?? handle?.database;
   if (database === undefined) throw new Error('There is no database.');
   const logger = overrides.logger ?? pino({ level: settings.logLevel });
-  const engine =
-    overrides.engine ??
-    createEngine({
-      threads: settings.engineWorkers,
-      report: (error) => logger.error({ err: error }, 'a thread of the engine broke'),
-    });
+  const report = (error: Error) => {
+    logger.error({ err: error }, 'a worker thread broke');
+  };
+  const engine = overrides.engine ?? createEngine({ threads: settings.engineWorkers, report });
+  const exporter = overrides.exporter ?? createExporter({ report });
   return {
     settings,
     database,
     engine,
+    exporter,
     logger,
     clock: () => new Date(),
     random: () => randomInt(2 ** 32) / 2 ** 32,
     close: async () => {
-      await engine.close();
+      await Promise.all([engine.close(), exporter.close()]);
       await handle?.close();
     },
     ...overrides,

@@ -23,6 +23,8 @@ const environmentSchema = z.object({
   TRUST_PROXY: z.string().optional(),
   /** Folder of the built client; nothing is served but the API when it is empty. */
   STATIC_DIR: z.string().optional(),
+  /** Who sets the papers; printed on their covers. */
+  ORGANISATION: z.string().max(120).default('Assessment team'),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
   /** Threads of the engine; 0 means one fewer than the processor has, at least one. */
   ENGINE_WORKERS: z.coerce.number().int().min(0).max(64).default(0),
@@ -42,6 +44,7 @@ export interface Settings {
   /** As Express's setting `trust proxy`. */
   trustProxy: boolean | number | string;
   staticFolder: string | null;
+  organisation: string;
   logLevel: string;
   engineWorkers: number;
   sessionHours: number;
@@ -76,6 +79,7 @@ export function readSettings(environment: Readonly<Record<string, string | undef
     secureCookies: values.SECURE_COOKIES ?? https,
     trustProxy: readTrustProxy(values.TRUST_PROXY ?? (https ? '1' : 'false')),
     staticFolder: values.STATIC_DIR ?? null,
+    organisation: values.ORGANISATION,
     logLevel: values.LOG_LEVEL,
     engineWorkers: values.ENGINE_WORKERS,
     sessionHours: values.SESSION_HOURS,
