@@ -5,6 +5,7 @@ import { deskRoutes } from './desk/routes.ts';
 import { checkingRoutes } from './checking/routes.ts';
 import { figureRoutes } from './figures/routes.ts';
 import { itemRoutes } from './items/routes.ts';
+import { paperRoutes } from './papers/routes.ts';
 import { peopleRoutes } from './people/routes.ts';
 import { recordRoutes } from './records/routes.ts';
 import { reviewRoutes } from './reviews/routes.ts';
@@ -19,6 +20,7 @@ export function sessionedRoutes(context: AppContext, authentication: Authenticat
     ...checkingRoutes(context),
     ...figureRoutes(context),
     ...itemRoutes(context),
+    ...paperRoutes(context),
     ...peopleRoutes(context),
     ...recordRoutes(context),
     ...reviewRoutes(context),
