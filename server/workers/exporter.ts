@@ -1,14 +1,12 @@
 import type { PaperScheme, PaperSheet } from '#shared/sheet/model.ts';
 
+import type { Bitmaps } from '../export/bitmaps.ts';
 import { createTaskPool, type TaskPool } from './task-pool.ts';
 import { findWorkerFile } from './worker-file.ts';
 
-/** Pictures of a paper by the figure's id, as they were stored. */
-type Pictures = ReadonlyMap<number, { mediaType: string; bytes: Uint8Array }>;
-
 /** A document to be written. */
 export type ExportRequest =
-  | { kind: 'question-paper'; sheet: PaperSheet; bitmaps: Pictures }
+  | { kind: 'question-paper'; sheet: PaperSheet; bitmaps: Bitmaps }
   | { kind: 'mark-scheme'; scheme: PaperScheme };
 
 /** Writes documents in a thread of its own. */
