@@ -28,7 +28,10 @@ export const people = mysqlTable(
     createdAt: instantNow(),
     updatedAt: instantNow(),
   },
-  (table) => [index('people_name').on(table.name), check('people_email_lower', sql`binary email = binary lower(email)`)],
+  (table) => [
+    index('people_name').on(table.name),
+    check('people_email_lower', sql`binary email = binary lower(email)`),
+  ],
 );
 
 export const personRoles = mysqlTable(
