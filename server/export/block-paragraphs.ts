@@ -6,7 +6,7 @@ import {
   Table,
   TableCell,
   TableRow,
-  TextRun,
+  TabStopType,
   WidthType,
 } from 'docx';
 
@@ -14,7 +14,8 @@ import type { Block, Inline } from '#shared/sheet/model.ts';
 
 import type { Bitmaps } from './bitmaps.ts';
 import { figureParagraphs } from './figure-image.ts';
-import { equation, inlineRuns } from './inline-runs.ts';
+import { equation, inlineRuns, tabbed } from './inline-runs.ts';
+import { TEXT_WIDTH } from './styles.ts';
 
 /** What a document's parts share: pictures, and running numbers that stay the same from export to export. */
 export interface ExportState {
@@ -80,10 +81,7 @@ function listItem(blocks: readonly Block[], mark: string, style: BlockStyle): Pa
             style: style.style,
             keepNext: style.keepNext,
             indent: { left: 1100, hanging: 380 },
-            children: [
-              new TextRun({ text: index === 0 ? `${mark}\t` : '\t' }),
-              ...inlineRuns(block.children),
-            ],
+            children: [tabbed(index === 0 ? `${mark}\t` : '\t'), ...inlineRuns(block.children)],
           }),
         ]
       : [],
@@ -107,6 +105,9 @@ export function blockParagraphs(
           new Paragraph({
             style: index === firstText || lead.length === 0 ? style.style : 'PartContinued',
             keepNext: style.keepNext,
+            ...(index === lastText && tail.length > 0
+              ? { tabStops: [{ type: TabStopType.RIGHT, position: TEXT_WIDTH }] }
+              : {}),
             children: [
               ...(index === firstText ? lead : []),
               ...inlineRuns(block.children),

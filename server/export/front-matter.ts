@@ -6,6 +6,7 @@ import {
   NumberFormat,
   PageNumber,
   Paragraph,
+  Tab,
   TabStopType,
   Table,
   TableCell,
@@ -17,7 +18,7 @@ import {
 import type { DataSheetRow, PaperSheet } from '#shared/sheet/model.ts';
 
 import { RULED_TABLE } from './block-paragraphs.ts';
-import { equation, textRuns } from './inline-runs.ts';
+import { equation, tabbed, textRuns } from './inline-runs.ts';
 import { PAGE, TEXT_WIDTH } from './styles.ts';
 
 interface Running {
@@ -47,7 +48,7 @@ export function pageSetUp({ code, title, sealHash, kind }: Running) {
             tabStops: [{ type: TabStopType.RIGHT, position: TEXT_WIDTH }],
             children: [
               new TextRun(kind === '' ? title : `${title}, ${kind}`),
-              ...(draft ? [new TextRun({ text: '\tDRAFT: not sealed', bold: true })] : []),
+              ...(draft ? [tabbed('\tDRAFT: not sealed', { bold: true })] : []),
             ],
           }),
         ],
@@ -61,7 +62,9 @@ export function pageSetUp({ code, title, sealHash, kind }: Running) {
             tabStops: [{ type: TabStopType.RIGHT, position: TEXT_WIDTH }],
             children: [
               new TextRun(draft ? `${code}, draft` : `${code}, seal ${sealHash}`),
-              new TextRun({ children: ['\tpage ', PageNumber.CURRENT, ' of ', PageNumber.TOTAL_PAGES] }),
+              new TextRun({
+                children: [new Tab(), 'page ', PageNumber.CURRENT, ' of ', PageNumber.TOTAL_PAGES],
+              }),
             ],
           }),
         ],
@@ -118,7 +121,7 @@ export function cover(paper: PaperSheet): (Paragraph | Table)[] {
       tabStops: [{ type: TabStopType.RIGHT, position: TEXT_WIDTH }],
       children: [
         new TextRun(`Time: ${duration(paper.durationMinutes)}`),
-        new TextRun(`\tTotal: ${paper.marks} ${paper.marks === 1 ? 'mark' : 'marks'}`),
+        tabbed(`\tTotal: ${paper.marks} ${paper.marks === 1 ? 'mark' : 'marks'}`),
       ],
     }),
     candidateFields(),
@@ -130,7 +133,7 @@ export function cover(paper: PaperSheet): (Paragraph | Table)[] {
         new Paragraph({
           indent: { left: 360, hanging: 360 },
           tabStops: [{ type: TabStopType.LEFT, position: 360 }],
-          children: [new TextRun('–\t'), ...textRuns(instruction)],
+          children: [tabbed('–\t'), ...textRuns(instruction)],
         }),
     ),
   ];
@@ -163,7 +166,7 @@ export function dataSheet(rows: readonly DataSheetRow[]): (Paragraph | Table)[] 
               children: [
                 cell(0, new Paragraph({ style: 'TableText', text: row.name })),
                 cell(1, new Paragraph({ style: 'TableText', children: [equation(row.symbolLatex)] })),
-                cell(2, new Paragraph({ style: 'TableText', children: [equation(row.valueLatex)] })),
+                cell(2, new Paragraph({ style: 'TableText', children: textRuns(row.valueText) })),
               ],
             }),
         ),

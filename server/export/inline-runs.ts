@@ -1,4 +1,4 @@
-import { Math as WordMath, type ParagraphChild, TextRun } from 'docx';
+import { type IRunOptions, Math as WordMath, type ParagraphChild, Tab, TextRun } from 'docx';
 import { latexToMath } from 'docx/math';
 
 import type { Inline } from '#shared/sheet/model.ts';
@@ -23,6 +23,14 @@ export function textRuns(text: string, style: RunStyle = {}): TextRun[] {
   }
   if (from < text.length) runs.push(new TextRun({ ...style, text: text.slice(from) }));
   return runs;
+}
+
+/** A run of plain text in which tab characters become Word's own tabs. */
+export function tabbed(text: string, style: Omit<IRunOptions, 'children' | 'text'> = {}): TextRun {
+  const children = text
+    .split('\t')
+    .flatMap((piece, index) => [...(index === 0 ? [] : [new Tab()]), ...(piece === '' ? [] : [piece])]);
+  return new TextRun({ ...style, children });
 }
 
 /** A formula as a native Word equation. LaTeX that Word cannot set stands as it was written. */

@@ -16,7 +16,7 @@ import type { ItemScheme, PaperScheme, SchemePart } from '#shared/sheet/model.ts
 
 import { RULED_TABLE } from './block-paragraphs.ts';
 import { closingLine, pageSetUp } from './front-matter.ts';
-import { equation, inlineRuns, textRuns } from './inline-runs.ts';
+import { inlineRuns, tabbed, textRuns } from './inline-runs.ts';
 import { normalisePackage } from './normalise-package.ts';
 import { documentStyles, TEXT_WIDTH } from './styles.ts';
 
@@ -46,8 +46,8 @@ function guidance(part: SchemePart): Paragraph[] {
       style: 'TableText',
       children: [
         new TextRun({ text: 'Guidance: ', bold: true }),
-        ...textRuns(`${slip.name}${value}: ${earns}.${slip.text === '' ? '' : ' '}`),
-        ...textRuns(slip.text.replace(/\$([^$]*)\$/g, '$1')),
+        ...textRuns(`${slip.name}${value}: ${earns}.${slip.children.length === 0 ? '' : ' '}`),
+        ...inlineRuns(slip.children),
       ],
     });
   });
@@ -55,7 +55,7 @@ function guidance(part: SchemePart): Paragraph[] {
 
 function part(scheme: SchemePart): TableRow {
   const answer = [
-    ...(scheme.answer === null ? [] : [labelled('Answer', [equation(scheme.answer.latex)])]),
+    ...(scheme.answer === null ? [] : [labelled('Answer', textRuns(scheme.answer.text))]),
     ...(scheme.accepted === null ? [] : [labelled('Accept', textRuns(scheme.accepted))]),
     ...(scheme.figures?.endsWith('required') === true ? [labelled('Figures', textRuns(scheme.figures))] : []),
   ];
@@ -69,7 +69,7 @@ function part(scheme: SchemePart): TableRow {
             new Paragraph({
               style: 'TableText',
               tabStops: [{ type: TabStopType.RIGHT, position: (WIDTHS[1] ?? 0) - 160 }],
-              children: [...inlineRuns(each.children), new TextRun({ text: `\t${each.marks}` })],
+              children: [...inlineRuns(each.children), tabbed(`\t${each.marks}`)],
             }),
         ),
         ...answer,
@@ -95,7 +95,7 @@ function item(number: number, code: string, scheme: ItemScheme): (Paragraph | Ta
       children: [
         new TextRun(`Question ${number}`),
         new TextRun({ text: `  ${scheme.title}`, bold: false, size: 22 }),
-        new TextRun({ text: `\t${code}, ${scheme.marks} marks`, bold: false, size: 20 }),
+        tabbed(`\t${code}, ${scheme.marks} marks`, { bold: false, size: 20 }),
       ],
     }),
     new Table({

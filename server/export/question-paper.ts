@@ -5,6 +5,7 @@ import {
   LeaderType,
   Packer,
   Paragraph,
+  Tab,
   TabStopType,
   type Table,
   TextRun,
@@ -15,7 +16,7 @@ import type { ItemSheet, PaperSheet, SheetPart } from '#shared/sheet/model.ts';
 import type { Bitmaps } from './bitmaps.ts';
 import { blockParagraphs, type ExportState } from './block-paragraphs.ts';
 import { closingLine, cover, dataSheet, pageSetUp } from './front-matter.ts';
-import { textRuns } from './inline-runs.ts';
+import { tabbed, textRuns } from './inline-runs.ts';
 import { normalisePackage } from './normalise-package.ts';
 import { documentStyles, TEXT_WIDTH } from './styles.ts';
 
@@ -23,17 +24,21 @@ type Content = (Paragraph | Table)[];
 
 const RIGHT = [{ type: TabStopType.RIGHT, position: TEXT_WIDTH }];
 
-/** Lines for writing; all but the last stay with the next, so that a part is not torn apart. */
-function writingLines(count: number, keepLast: boolean): Paragraph[] {
-  return Array.from(
-    { length: count },
-    (_, index) =>
-      new Paragraph({
-        style: 'WritingLine',
-        keepNext: index < count - 1 || keepLast,
-        border: { bottom: { style: BorderStyle.DOTTED, size: 4, color: '9AA3AC', space: 1 } },
-      }),
-  );
+/** Lines for writing, as one paragraph that no page break can tear. */
+function writingLines(count: number, keepNext: boolean): Paragraph[] {
+  if (count === 0) return [];
+  return [
+    new Paragraph({
+      style: 'WritingLine',
+      keepNext,
+      keepLines: true,
+      tabStops: [{ type: TabStopType.RIGHT, position: TEXT_WIDTH, leader: LeaderType.DOT }],
+      children: Array.from(
+        { length: count },
+        (_, index) => new TextRun({ ...(index === 0 ? {} : { break: 1 }), children: [new Tab()] }),
+      ),
+    }),
+  ];
 }
 
 function answerLine(unit: string): Paragraph {
@@ -45,22 +50,27 @@ function answerLine(unit: string): Paragraph {
       { type: TabStopType.LEFT, position: Math.round(TEXT_WIDTH * 0.42) },
       { type: TabStopType.LEFT, position: end, leader: LeaderType.UNDERSCORE },
     ],
-    children: [new TextRun('\tAnswer\u00A0\t'), ...unitRuns],
+    children: [tabbed('\tAnswer\u00A0\t'), ...unitRuns],
   });
 }
 
 function part(sheet: SheetPart, state: ExportState): Content {
   const hasAnswerLine = sheet.answerUnit !== null;
+  const keepNext = sheet.lines > 0 || hasAnswerLine;
+  const marks = tabbed(`\t[${sheet.marks}]`, { bold: true });
+  // Marks stand at the end of the text; where the text ends with a formula or table they have a line of their own.
+  const endsInText = sheet.blocks.at(-1)?.kind === 'paragraph';
   return [
-    ...blockParagraphs(sheet.blocks, { style: 'PartText', keepNext: true }, state, [
-      new TextRun({ text: `(${sheet.letter})\t` }),
-    ]),
-    new Paragraph({
-      tabStops: RIGHT,
-      spacing: { before: 0, after: 40 },
-      keepNext: sheet.lines > 0 || hasAnswerLine,
-      children: [new TextRun({ text: `\t[${sheet.marks}]`, bold: true })],
-    }),
+    ...blockParagraphs(
+      sheet.blocks,
+      { style: 'PartText', keepNext: true },
+      state,
+      [tabbed(`(${sheet.letter})\t`)],
+      endsInText ? [marks] : [],
+    ),
+    ...(endsInText
+      ? []
+      : [new Paragraph({ tabStops: RIGHT, spacing: { before: 0, after: 40 }, keepNext, children: [marks] })]),
     ...writingLines(sheet.lines, hasAnswerLine),
     ...(sheet.answerUnit === null ? [] : [answerLine(sheet.answerUnit)]),
   ];
@@ -89,11 +99,7 @@ function item(number: number, sheet: ItemSheet, state: ExportState, first: boole
       tabStops: RIGHT,
       children: [
         new TextRun(`Question ${number}`),
-        new TextRun({
-          text: `\t${sheet.marks} ${sheet.marks === 1 ? 'mark' : 'marks'}`,
-          bold: false,
-          size: 20,
-        }),
+        tabbed(`\t${sheet.marks} ${sheet.marks === 1 ? 'mark' : 'marks'}`, { bold: false, size: 20 }),
       ],
     }),
     ...cautions(sheet.cautions),

@@ -141,7 +141,7 @@ function schemePart(item: ItemAtDraw, part: Part, index: number, context: FillCo
     guidance: part.answer.slips.map((slip) => ({
       name: slip.name,
       value: slipValue(item, part, slip.expression),
-      text: slip.guidance,
+      children: fillLine(slip.guidance, context),
       marks: slip.marks,
     })),
   };

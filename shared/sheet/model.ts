@@ -101,7 +101,7 @@ export const schemePartSchema = z.object({
       name: z.string(),
       /** The answer that this wrong working gives. */
       value: z.string(),
-      text: z.string(),
+      children: z.array(inlineSchema),
       marks: z.number().int(),
     }),
   ),
