@@ -1,5 +1,5 @@
 import { compileExpression } from '../compile/expressions.ts';
-import { drawsInWords, finding, shareInWords, type RunningCheck } from './check.ts';
+import { drawsShow, finding, shareInWords, type RunningCheck } from './check.ts';
 import type { AssayContext } from './context.ts';
 import { measurePart, type PartMeasure } from './measure-part.ts';
 import { recommendBand } from './recommend-band.ts';
@@ -22,7 +22,7 @@ function tellRoutes(measure: PartMeasure): Finding[] {
   return [
     finding('route-outside-band', {
       about: part.id,
-      statement: `In part (${letter}), ${routeInWords(worst.route, measure.part)} gives an answer ${shareInWords(share)} from the model answer on draw ${worst.outside.worstDraw}, outside the band; ${drawsInWords(worst.outside.count)} show it.`,
+      statement: `In part (${letter}), ${routeInWords(worst.route, measure.part)} gives an answer ${shareInWords(share)} from the model answer on draw ${worst.outside.worstDraw}, outside the band; ${drawsShow(worst.outside.count)}.`,
       cure: 'Widen the band to the recommended one, or ask for fewer figures.',
       place: { partId: part.id },
       tally: worst.outside,
@@ -53,7 +53,7 @@ function tellUniqueness(context: AssayContext, measure: PartMeasure): Finding[] 
     findings.push(
       finding(kind === 'slip' ? 'slip-inside-band' : 'near-miss-inside-band', {
         about: `${part.id}:${label}`,
-        statement: `In part (${letter}) a wrong working (${label}) comes within ${shareInWords(reach.closest)} of the model answer on draw ${reach.draw} and would earn the mark; ${drawsInWords(reach.inside.count)} show it.`,
+        statement: `In part (${letter}) a wrong working (${label}) comes within ${shareInWords(reach.closest)} of the model answer on draw ${reach.draw} and would earn the mark; ${drawsShow(reach.inside.count)}.`,
         cure: 'Narrow the band, or change the ranges so that the two answers part.',
         place: { partId: part.id },
         tally: reach.inside,

@@ -3,12 +3,15 @@ import type { BlockValues } from '../compile/compiled-script.ts';
 import { dependenciesOf } from '../compile/dependencies.ts';
 import { LAWS, suggestForFactor, type LawRow } from '../physics/laws.ts';
 import { findRole } from '../physics/roles.ts';
-import { drawsInWords, finding, Tally, type CheckStart } from './check.ts';
+import { formatNumber } from '../units/format.ts';
+import { drawsShow, finding, shareInWords, Tally, type CheckStart } from './check.ts';
 import { bindRoles, isBound, roleValue, type BoundSet } from './roles-bound.ts';
 import type { AssayContext } from './context.ts';
 
-/** Room for floating-point arithmetic and for constants quoted to ten figures. */
-const FLOOR = 1e-6;
+/** Room for constants that a script writes as numbers to two or three figures, as g = 9.81 m s⁻²; relative. */
+const FLOOR = 5e-3;
+/** Room where readings carry scatter: lost factors still show. */
+const SCATTER_ROOM = 0.3;
 /** Givens are rounded half a unit at most; a little more is allowed for second-order effects. */
 const ROOM = 1.2;
 
@@ -18,6 +21,8 @@ interface BoundLaw {
   names: string[];
   /** Rounded givens that the bound names rest on, with the figures they print. */
   givens: { name: string; figures: number }[];
+  /** Relative miss that is always allowed. */
+  floor: number;
   tally: Tally;
   worstRatio: number;
 }
@@ -31,9 +36,31 @@ function roundedGivens(context: AssayContext, names: readonly string[]): BoundLa
   );
 }
 
+function hasScatter(context: AssayContext, names: readonly string[]): boolean {
+  const reached = new Set(names.flatMap((name) => [name, ...dependenciesOf(context.script, name).names]));
+  return context.script.statements.some(
+    (statement) => statement.kind === 'scatter' && reached.has(statement.name),
+  );
+}
+
+/** Subject over what the law gives for it. */
 function ratioAt({ law, set }: BoundLaw, columns: ReadonlyMap<string, Float64Array>, index: number): number {
   const value = roleValue(set, columns, index);
   return value(law.subject) / law.formula(value);
+}
+
+/** Whether the script follows a finer form of the law, as with special relativity. */
+function isRefined(
+  { law, set, floor }: BoundLaw,
+  columns: ReadonlyMap<string, Float64Array>,
+  index: number,
+  room: number,
+): boolean {
+  const value = roleValue(set, columns, index);
+  return law.refinements.some(({ formula }) => {
+    const ratio = value(law.subject) / formula(value);
+    return ratio > 0 && Math.abs(Math.log(ratio)) <= floor + room;
+  });
 }
 
 /** How far rounding the givens as printed can move the law's ratio, relative, draw by draw. */
@@ -59,11 +86,12 @@ function roundingRoom(context: AssayContext, bound: BoundLaw, block: BlockValues
   return room;
 }
 
-function ratioInWords(ratio: number): string {
-  const size = Math.abs(ratio);
-  return size >= 1e4 || size < 1e-2
-    ? ratio.toExponential(2).replace('e', ' × 10^').replace('+', '')
-    : ratio.toPrecision(3);
+/** A miss in words: as "2.00 times", or "4.2 % more than" where it is small. */
+function missInWords(ratio: number): string {
+  if (ratio > 0.9 && ratio < 1.1) {
+    return `${shareInWords(ratio - 1)} ${ratio > 1 ? 'more' : 'less'} than`;
+  }
+  return `${formatNumber(ratio, { figures: 3 }).text} times`;
 }
 
 /** 3. Every law whose roles are all bound holds on every draw, to the rounding of the givens. */
@@ -72,7 +100,15 @@ export const checkLaws: CheckStart = (context) => {
     LAWS.filter((law) => set.names.has(law.subject) && law.others.every((role) => isBound(set, role))).map(
       (law): BoundLaw => {
         const names = [law.subject, ...law.others].flatMap((role) => set.names.get(role) ?? []);
-        return { law, set, names, givens: roundedGivens(context, names), tally: new Tally(), worstRatio: 1 };
+        return {
+          law,
+          set,
+          names,
+          givens: roundedGivens(context, names),
+          floor: hasScatter(context, names) ? SCATTER_ROOM : FLOOR,
+          tally: new Tally(),
+          worstRatio: 1,
+        };
       },
     ),
   );
@@ -84,9 +120,11 @@ export const checkLaws: CheckStart = (context) => {
           if (block.kept[index] === 0) continue;
           const ratio = ratioAt(entry, block.columns, index);
           const miss = Math.abs(Math.log(ratio));
-          if (miss <= FLOOR || Number.isNaN(ratio)) continue;
+          if (miss <= entry.floor || Number.isNaN(ratio)) continue;
           room ??= roundingRoom(context, entry, block);
-          if (ratio > 0 && miss <= FLOOR + ROOM * (room[index] ?? 0)) continue;
+          const allowed = ROOM * (room[index] ?? 0);
+          if (ratio > 0 && miss <= entry.floor + allowed) continue;
+          if (isRefined(entry, block.columns, index, allowed)) continue;
           const badness = ratio > 0 ? miss : Infinity;
           if (badness > entry.tally.worstBadness) entry.worstRatio = ratio;
           entry.tally.add(block.draws[index] ?? 0, badness);
@@ -104,7 +142,7 @@ export const checkLaws: CheckStart = (context) => {
           const info = context.script.quantities.find((quantity) => quantity.name === name);
           return finding('law-broken', {
             about: `${law.id}:${set.set}`,
-            statement: `The script’s “${name}” (${role}) is ${ratioInWords(worstRatio)} times what ${law.statement} gives, on draw ${tally.worstDraw}; ${drawsInWords(tally.count)} show it.${suggestion === '' ? '' : ` ${suggestion}`}`,
+            statement: `The script’s “${name}” (${role}) is ${missInWords(worstRatio)} what ${law.statement} gives, on draw ${tally.worstDraw}; ${drawsShow(tally.count)}.${suggestion === '' ? '' : ` ${suggestion}`}`,
             cure: `Mend the line that works out “${name}”, or correct what the quantities stand for.`,
             place: { quantity: name, span: info?.span },
             tally,

@@ -4,7 +4,7 @@ import { findRole } from '../physics/roles.ts';
 import { sameDimension } from '../units/dimension.ts';
 import { readUnit } from '../units/read-unit.ts';
 import type { BlockValues } from '../compile/compiled-script.ts';
-import { drawsInWords, finding, Tally, type CheckStart } from './check.ts';
+import { drawsShow, finding, Tally, type CheckStart } from './check.ts';
 import type { AssayContext } from './context.ts';
 import type { Finding } from './report.ts';
 import { bindRoles, type BoundSet } from './roles-bound.ts';
@@ -41,7 +41,7 @@ function speedRules(context: AssayContext): Rule[] {
       names: [info.name],
       failure: ([v = 0]) => (Math.abs(v) >= LIGHT ? Math.abs(v) : null),
       statement: ([v], draw, draws) =>
-        `On draw ${draw} “${info.name}” is ${v}, which is not below the speed of light; ${draws} show it.`,
+        `On draw ${draw} “${info.name}” is ${v}, which is not below the speed of light; ${draws}.`,
       cure: 'Lower the energy or the field that gives this speed, or mend the working.',
     }));
 }
@@ -60,7 +60,7 @@ function positiveRules(context: AssayContext): Rule[] {
       names: [info.name],
       failure: ([x = 0]) => (x <= 0 ? -x : null),
       statement: ([x], draw, draws) =>
-        `On draw ${draw} “${info.name}” is ${x}: it must be greater than zero; ${draws} show it.`,
+        `On draw ${draw} “${info.name}” is ${x}: it must be greater than zero; ${draws}.`,
       cure: 'Tighten the ranges so that it stays positive, or mend the working.',
     }));
 }
@@ -75,7 +75,7 @@ function roleRules(set: BoundSet): Rule[] {
         failure: ([n = 0]) =>
           Math.abs(n - Math.round(n)) > 1e-9 || n < 1 ? Math.abs(n - Math.round(n)) + 1 : null,
         statement: ([n], draw, draws) =>
-          `On draw ${draw} “${name}” (${findRole(role)?.name ?? role}) is ${n}, which is no whole number of at least 1; ${draws} show it.`,
+          `On draw ${draw} “${name}” (${findRole(role)?.name ?? role}) is ${n}, which is no whole number of at least 1; ${draws}.`,
         cure: 'Draw it with whole(from, to), or round what the readings give.',
       });
     }
@@ -90,7 +90,7 @@ function roleRules(set: BoundSet): Rule[] {
           return size < range.least ? range.least / size : size / range.greatest;
         },
         statement: ([x], draw, draws) =>
-          `On draw ${draw} “${name}” (${findRole(role)?.name ?? role}) is ${x}; ${range.words}; ${draws} show it.`,
+          `On draw ${draw} “${name}” (${findRole(role)?.name ?? role}) is ${x}; ${range.words}; ${draws}.`,
         cure: 'Choose values that such apparatus has, or say in the stem what is special.',
       });
     }
@@ -111,7 +111,7 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
       names: photons,
       failure: ([photon = 0, work = 0]) => (photon <= work ? work / photon : null),
       statement: ([photon, work], draw, draws) =>
-        `On draw ${draw} the photons carry ${photon}, which does not exceed the work function of ${work}, so no electron is freed; ${draws} show it.`,
+        `On draw ${draw} the photons carry ${photon}, which does not exceed the work function of ${work}, so no electron is freed; ${draws}.`,
       cure: 'Shorten the wavelengths or lower the work functions, or require that the photon energy is the greater.',
     });
   }
@@ -121,7 +121,7 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
       names: photons,
       failure: ([photon = 0, work = 0]) => (photon > work ? photon / work : null),
       statement: ([photon, work], draw, draws) =>
-        `On draw ${draw} the photons carry ${photon}, more than the work function of ${work}, so electrons are freed; ${draws} show it.`,
+        `On draw ${draw} the photons carry ${photon}, more than the work function of ${work}, so electrons are freed; ${draws}.`,
       cure: 'Lengthen the wavelengths or raise the work functions.',
     });
   }
@@ -132,7 +132,7 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
       names: [greatest],
       failure: ([energy = 0]) => (energy <= 0 ? -energy : null),
       statement: ([energy], draw, draws) =>
-        `On draw ${draw} “${greatest}” is ${energy}: no electron is freed; ${draws} show it.`,
+        `On draw ${draw} “${greatest}” is ${energy}: no electron is freed; ${draws}.`,
       cure: 'Shorten the wavelengths or lower the work functions.',
     });
   }
@@ -143,7 +143,7 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
       names: plates,
       failure: ([y = 0, d = 0]) => (Math.abs(y) >= d / 2 ? Math.abs(y) / d : null),
       statement: ([y, d], draw, draws) =>
-        `On draw ${draw} the beam is deflected by ${y} between plates that are ${d} apart, so it hits a plate; ${draws} show it.`,
+        `On draw ${draw} the beam is deflected by ${y} between plates that are ${d} apart, so it hits a plate; ${draws}.`,
       cure: 'Lower the p.d., shorten the plates, or require that the deflection stays below half the separation.',
     });
   }
@@ -154,7 +154,7 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
       names: gap,
       failure: ([pd = 0, d = 1]) => (pd / d > AIR_BREAKDOWN ? pd / d : null),
       statement: ([pd, d], draw, draws) =>
-        `On draw ${draw} ${pd} across ${d} is a field above 3 MV m⁻¹, at which air breaks down; ${draws} show it.`,
+        `On draw ${draw} ${pd} across ${d} is a field above 3 MV m⁻¹, at which air breaks down; ${draws}.`,
       cure: 'Lower the p.d. or widen the gap.',
     });
   }
@@ -193,7 +193,7 @@ export const checkLimits: CheckStart = (context) => {
           const printed = worst.map((value, index) => context.print(rule.names[index] ?? '', value));
           return finding(rule.code, {
             about: rule.names.join(':'),
-            statement: rule.statement(printed, tally.worstDraw ?? 0, drawsInWords(tally.count)),
+            statement: rule.statement(printed, tally.worstDraw ?? 0, drawsShow(tally.count)),
             cure: rule.cure,
             place: {
               quantity: name,

@@ -1,6 +1,6 @@
 import { CONSTANTS } from '../physics/constants.ts';
 import { CHARGE, MASS } from '../physics/laws.ts';
-import { drawsInWords, finding, Tally, type CheckStart } from './check.ts';
+import { drawsShow, finding, Tally, type CheckStart } from './check.ts';
 import type { AssayPart } from './context.ts';
 import { bandsOfBlock } from './part-marking.ts';
 import { bindRoles, isBound, roleValue } from './roles-bound.ts';
@@ -162,7 +162,7 @@ export const checkValidity: CheckStart = (context) => {
               : 'model-error-near-band';
           return finding(code, {
             about: `${model.id}:${part.part.id}:${set.set}`,
-            statement: `${model.words} is ${(worstError * 100).toPrecision(2)} % out in the answer to part (${part.letter}) on draw ${tally.worstDraw}, ${worstShare > 1 ? 'more than the whole band' : 'over a third of the band'}; ${drawsInWords(tally.count)} show it.`,
+            statement: `${model.words} is ${(worstError * 100).toPrecision(2)} % out in the answer to part (${part.letter}) on draw ${tally.worstDraw}, ${worstShare > 1 ? 'more than the whole band' : 'over a third of the band'}; ${drawsShow(tally.count)}.`,
             cure: stated ? 'The item states this simplification.' : model.cure,
             place: { partId: part.part.id },
             tally,

@@ -66,6 +66,11 @@ export function drawsInWords(count: number): string {
   return count === 1 ? '1 draw' : `${count.toLocaleString('en-GB')} draws`;
 }
 
+/** As "1 draw shows it" or "320 draws show it". */
+export function drawsShow(count: number): string {
+  return `${drawsInWords(count)} ${count === 1 ? 'shows' : 'show'} it`;
+}
+
 /** A relative size in words: as "0.57 %", "120 %", or "200 times". */
 export function shareInWords(share: number): string {
   const size = Math.abs(share);

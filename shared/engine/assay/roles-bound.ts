@@ -74,7 +74,7 @@ export function roleValue(
     if (name !== undefined) return columns.get(name)?.[index] ?? NaN;
     if (role === MASS) return set.particle?.mass ?? NaN;
     if (role === CHARGE) return set.particle?.charge ?? NaN;
-    return role === 'airDensity' ? 0 : NaN;
+    return NaN;
   };
 }
 
