@@ -72,9 +72,7 @@ describe.each(WORKED_EXAMPLES)('$id ($source, $locator)', (example) => {
   it('breaks no law and no limit', () => {
     const { report, diagnostics } = assayItem(itemOf(example));
     expect(diagnostics).toEqual([]);
-    expect(
-      blockersOf(report).filter(({ check }) => check !== 'validity' && check !== 'routes'),
-    ).toEqual([]);
+    expect(blockersOf(report).filter(({ check }) => check !== 'validity' && check !== 'routes')).toEqual([]);
   });
 });
 

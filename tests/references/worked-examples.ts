@@ -123,7 +123,8 @@ r = m_e * v / (e * B)`,
 q = 3.2e-19 C
 R = 0.50 m
 B = 1.8 T
-period = 2 * pi * M / (q * B)
+top = 2 * pi * M
+period = top / (q * B)
 K = (q * B * R)^2 / (2 * M)`,
     roles: {
       M: 'particleMass',
@@ -134,7 +135,13 @@ K = (q * B * R)^2 / (2 * M)`,
       K: 'kineticEnergy',
     },
     answers: [
-      { quantity: 'period', unit: 's', printed: 7.3e-8, figures: 2 },
+      {
+        quantity: 'period',
+        unit: 's',
+        printed: 7.3e-8,
+        figures: 2,
+        remark: 'in full 7.24e-8 s: the printed answer is the route that rounds 2πm to 4.2e-26 kg first',
+      },
       { quantity: 'K', unit: 'MeV', printed: 39, figures: 2 },
     ],
   },
