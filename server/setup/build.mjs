@@ -1,4 +1,5 @@
 import { existsSync, readdirSync, rmSync } from 'node:fs';
+import path from 'node:path';
 
 import { fingerprint, isRecorded, record } from './fingerprint.mjs';
 import { inProject } from './places.mjs';
@@ -21,31 +22,34 @@ const SOURCES = [
 /** Tests change nothing in what is built. */
 const leftOut = (name) => /\.(test|long)\.tsx?$/.test(name);
 
-/** The client for browsers into dist/client. */
-function buildClient() {
-  return run('node', ['node_modules/vite/bin/vite.js', 'build', '--logLevel', 'warn'], {
-    env: { ...process.env, NODE_ENV: 'production' },
-  });
+/** The client for browsers into `folder`/client. */
+function buildClient(folder) {
+  const client = path.join(folder, 'client');
+  return run(
+    'node',
+    ['node_modules/vite/bin/vite.js', 'build', '--outDir', client, '--emptyOutDir', '--logLevel', 'warn'],
+    { env: { ...process.env, NODE_ENV: 'production' } },
+  );
 }
 
-/** The server, its threads and its one-off programs, one bundle each, into dist/server. */
-async function buildServer() {
+/** The server, its threads and its one-off programs, one bundle each, into `folder`/server. */
+async function buildServer(folder) {
   // Loaded late: this file is read before the packages are installed.
   const { build } = await import('esbuild');
-  const workers = readdirSync(inProject('server/workers')).filter((name) => name.endsWith('-worker.ts'));
-  const entries = {
+  const entryPoints = {
     main: 'server/main.ts',
     migrate: 'server/db/migrate.ts',
     seed: 'server/db/seed/main.ts',
+    'demo-people': 'server/db/seed/demo-people.ts',
   };
-  for (const name of workers) entries[`workers/${name.slice(0, -'.ts'.length)}`] = `server/workers/${name}`;
-  const present = Object.fromEntries(
-    Object.entries(entries).filter(([, file]) => existsSync(inProject(file))),
-  );
+  for (const name of readdirSync(inProject('server/workers'))) {
+    if (name.endsWith('-worker.ts'))
+      entryPoints[`workers/${path.parse(name).name}`] = `server/workers/${name}`;
+  }
   await build({
     absWorkingDir: inProject(),
-    entryPoints: present,
-    outdir: 'dist/server',
+    entryPoints,
+    outdir: path.join(folder, 'server'),
     bundle: true,
     platform: 'node',
     target: 'node20',
@@ -58,15 +62,19 @@ async function buildServer() {
   });
 }
 
-/** Builds client and server into dist/, unless the sources are those of the last build. */
-export async function ensureBuilt() {
+/**
+ * Builds client and server into `folder` of the project, unless the sources are those of its last build. Tests
+ * build into a folder of their own, so that a running server keeps its files.
+ */
+export async function ensureBuilt(folder) {
+  const name = `build-${path.basename(folder)}`;
+  const place = inProject(folder);
   const sources = fingerprint(SOURCES, leftOut);
-  const present =
-    existsSync(inProject('dist/client/index.html')) && existsSync(inProject('dist/server/main.js'));
-  if (present && isRecorded('build', sources)) return;
+  const present = ['client/index.html', 'server/main.js'].every((file) => existsSync(path.join(place, file)));
+  if (present && isRecorded(name, sources)) return;
   say('Building.');
-  rmSync(inProject('dist'), { recursive: true, force: true });
-  await buildClient();
-  await buildServer();
-  record('build', sources);
+  rmSync(place, { recursive: true, force: true });
+  await buildClient(place);
+  await buildServer(place);
+  record(name, sources);
 }

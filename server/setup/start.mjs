@@ -1,0 +1,60 @@
+import { rmSync } from 'node:fs';
+
+import { ensureBuilt } from './build.mjs';
+import { ensureDebianPackages, toServe } from './debian-packages.mjs';
+import { choosePort, prepareDatabase, productEnvironment, provideDatabase } from './environment.mjs';
+import { ensureNpmPackages } from './npm-packages.mjs';
+import { inData, inProject, makeDataFolder } from './places.mjs';
+import { processOf, writePidFile } from './processes.mjs';
+import { main, say, SetupError } from './say.mjs';
+import { endOrphanedServer, startServer } from './serve.mjs';
+import { showSignIns } from './sign-ins.mjs';
+import { createStoppers } from './stoppers.mjs';
+
+const SERVER = 'dist/server/main.js';
+const ownPidFile = inData('start.pid');
+const serverPidFile = inData('server.pid');
+
+/** One start at a time: a second would take the first one's processes for orphans. */
+function claim() {
+  makeDataFolder();
+  const other = processOf(ownPidFile, 'setup/start.mjs') ?? processOf(ownPidFile, 'setup/dev.mjs');
+  if (other !== null) {
+    throw new SetupError(`The project already runs here as process ${other}. Stop that first.`);
+  }
+  writePidFile(ownPidFile, process.pid);
+}
+
+await main(async () => {
+  claim();
+  const stoppers = createStoppers();
+  stoppers.add(async () => rmSync(ownPidFile, { force: true }));
+  try {
+    await endOrphanedServer(serverPidFile, SERVER);
+    const port = await choosePort();
+    await ensureDebianPackages(process.env['DATABASE_URL'] ? {} : toServe);
+    await ensureNpmPackages();
+    await ensureBuilt('dist');
+
+    const database = await provideDatabase(stoppers);
+    const extra = { NODE_ENV: 'production', PORT: String(port), STATIC_DIR: inProject('dist/client') };
+    const owner = productEnvironment(database.ownerUrl, extra);
+    await prepareDatabase([], ['dist/server/migrate.js', 'dist/server/seed.js'], owner);
+
+    const server = await startServer({
+      args: ['--enable-source-maps', SERVER],
+      env: productEnvironment(database.applicationUrl, extra),
+      port,
+      pidFile: serverPidFile,
+    });
+    stoppers.add(server.stop);
+    say(`Graticule is at http://${process.env['HOST'] || 'localhost'}:${port}`);
+    await showSignIns();
+    say('Ctrl-C stops it.');
+
+    const ended = await Promise.race([server.ended, database.ended]);
+    if (!stoppers.isStopping()) throw new SetupError(`The server ended by itself with code ${ended}.`);
+  } finally {
+    await stoppers.stopAll();
+  }
+});
