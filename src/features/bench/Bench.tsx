@@ -2,10 +2,12 @@ import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useRef, useState } from 'react';
 
 import type { Item } from '#shared/contracts/items.ts';
-import { benchCalls, itemQuery, saveFailureOf, sentenceOf, storedItemOf, topicsQuery } from './api.ts';
+import { sentenceOf } from '#src/lib/api.ts';
+import { benchCalls, itemQuery, saveFailureOf, storedItemOf, topicsQuery } from './api.ts';
 import { keptDraft, forgetDraft } from './autosave/kept-draft.ts';
 import { openingOf } from './autosave/opening.ts';
 import { useAutosave } from './autosave/use-autosave.ts';
+import './bench.css';
 import { BenchActions } from './BenchActions.tsx';
 import { BenchHeader } from './BenchHeader.tsx';
 import { BenchSheet } from './BenchSheet.tsx';

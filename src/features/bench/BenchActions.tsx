@@ -3,8 +3,10 @@ import { useState, type ReactNode } from 'react';
 
 import type { Item, StoredAssay } from '#shared/contracts/items.ts';
 import type { ItemContent } from '#shared/engine/index.ts';
+import { AppError } from '#shared/errors/app-error.ts';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
-import { reviewersQuery, revisionsQuery, sentenceOf, type BenchCalls } from './api.ts';
+import { sentenceOf } from '#src/lib/api.ts';
+import { reviewersQuery, revisionsQuery, type BenchCalls } from './api.ts';
 import type { FindingTarget } from './findings/group-findings.ts';
 import { RevisionList } from './revisions/RevisionList.tsx';
 import { ReasonForm } from './sending/ReasonForm.tsx';
@@ -38,7 +40,7 @@ export function BenchActions(props: BenchActionsProps) {
     await onChanged(next);
   };
   const assay = async (): Promise<StoredAssay> => {
-    if ((await saveNow()) === null) throw new Error(NOT_SAVED);
+    if ((await saveNow()) === null) throw new AppError('notPossible', NOT_SAVED);
     return calls.assay();
   };
   const begin = async (): Promise<void> => {
@@ -84,7 +86,7 @@ export function BenchActions(props: BenchActionsProps) {
           onAssay={assay}
           onSend={async (sending) => {
             const version = await saveNow();
-            if (version === null) throw new Error(NOT_SAVED);
+            if (version === null) throw new AppError('notPossible', NOT_SAVED);
             await done(await calls.send(sending, version));
           }}
           onCancel={close}

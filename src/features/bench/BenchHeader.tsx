@@ -3,6 +3,7 @@ import type { ReactNode } from 'react';
 import { ITEM_STATE_NAMES } from '#shared/domain/item-life.ts';
 import type { Item } from '#shared/contracts/items.ts';
 import type { ItemContent } from '#shared/engine/index.ts';
+import { countOf } from '#src/lib/format.ts';
 import type { Autosave } from './autosave/use-autosave.ts';
 import { SaveState } from './autosave/SaveState.tsx';
 import { totalMarks } from './draft/edit-content.ts';
@@ -37,7 +38,7 @@ export function BenchHeader(props: BenchHeaderProps) {
         <p className="flex flex-wrap gap-x-4 text-sm">
           <span>{ITEM_STATE_NAMES[item.state]}</span>
           <span className="text-muted">Revision {item.revision.number}</span>
-          <span className="text-muted">{marks === 1 ? '1 mark' : `${marks} marks`}</span>
+          <span className="text-muted">{countOf(marks, 'mark')}</span>
           {findings !== null && (
             <button type="button" className="link" onClick={props.onShowFindings}>
               {findings}

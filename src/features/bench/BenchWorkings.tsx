@@ -40,7 +40,7 @@ export function BenchWorkings(props: BenchWorkingsProps) {
   );
   const mistakes = diagnostics.filter((diagnostic) => diagnostic.field === '');
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-8">
       <section aria-labelledby="bench-script">
         <h2 id="bench-script" className="section-title">
           Script

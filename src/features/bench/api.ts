@@ -19,7 +19,7 @@ import { choosePeople } from '#shared/contracts/people.ts';
 import { listTopics } from '#shared/contracts/topics.ts';
 import type { ItemContent } from '#shared/engine/index.ts';
 import { AppError } from '#shared/errors/app-error.ts';
-import { call, sendFile } from '#src/lib/api.ts';
+import { call, NoConnection, sendFile, sentenceOf } from '#src/lib/api.ts';
 import type { Draft, SaveFailure } from './autosave/autosave-machine.ts';
 import type { Sending } from './sending/SendForm.tsx';
 
@@ -78,7 +78,8 @@ export function storedItemOf(error: unknown): Item | null {
 
 /** Sorts an error of a save: no connection, no session, a conflict, or a refusal with its sentence. */
 export function saveFailureOf(error: unknown): SaveFailure {
-  if (!(error instanceof AppError)) return { kind: 'offline' };
+  if (error instanceof NoConnection) return { kind: 'offline' };
+  if (!(error instanceof AppError)) return { kind: 'refused', message: sentenceOf(error) };
   switch (error.code) {
     case 'notSignedIn':
     case 'badCsrfToken':
@@ -91,14 +92,7 @@ export function saveFailureOf(error: unknown): SaveFailure {
     case 'busy':
     case 'internal':
       return { kind: 'offline' };
-    default: {
-      const details = error.fields?.map((field) => field.message) ?? [];
-      return { kind: 'refused', message: [error.message, ...details].join(' ') };
-    }
+    default:
+      return { kind: 'refused', message: sentenceOf(error) };
   }
-}
-
-/** An error in words that can be shown. */
-export function sentenceOf(error: unknown): string {
-  return error instanceof Error && error.message !== '' ? error.message : 'Something went wrong. Try again.';
 }

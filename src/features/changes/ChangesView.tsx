@@ -1,4 +1,5 @@
 import type { ItemContent } from '#shared/engine/index.ts';
+import './changes.css';
 import { compareContent, type Change, type Run } from './compare-content.ts';
 
 function Runs({ runs, lines }: { runs: readonly Run[]; lines: boolean }) {

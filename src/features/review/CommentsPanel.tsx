@@ -3,6 +3,8 @@ import { useForm } from 'react-hook-form';
 import { z } from 'zod';
 
 import type { ReviewComment } from '#shared/contracts/reviews.ts';
+import { formatDayAndTime } from '#src/lib/format.ts';
+import { sentenceOf } from '#src/lib/api.ts';
 
 const commentForm = z.object({
   anchor: z.string(),
@@ -23,8 +25,6 @@ interface CommentsPanelProps {
   onComment: (anchor: string, text: string) => Promise<void>;
 }
 
-const when = new Intl.DateTimeFormat('en-GB', { dateStyle: 'medium', timeStyle: 'short' });
-
 /** Comments by place, in the order they were written, and a form for the next. Ctrl or Cmd with Enter sends it. */
 export function CommentsPanel({ comments, anchors, canComment, onComment }: CommentsPanelProps) {
   const { register, handleSubmit, reset, setError, formState } = useForm<CommentValues>({
@@ -37,7 +37,7 @@ export function CommentsPanel({ comments, anchors, canComment, onComment }: Comm
       await onComment(anchor, text);
       reset({ anchor, text: '' });
     } catch (error) {
-      setError('text', { message: error instanceof Error ? error.message : 'This could not be sent.' });
+      setError('text', { message: sentenceOf(error) });
     }
   });
   const placed = anchors.filter((anchor) => comments.some((comment) => comment.anchor === anchor.value));
@@ -51,7 +51,7 @@ export function CommentsPanel({ comments, anchors, canComment, onComment }: Comm
             <p className="whitespace-pre-wrap">{comment.text}</p>
             <p className="text-sm text-muted">
               {comment.author.name},{' '}
-              <time dateTime={comment.createdAt}>{when.format(new Date(comment.createdAt))}</time>
+              <time dateTime={comment.createdAt}>{formatDayAndTime(comment.createdAt)}</time>
             </p>
           </li>
         ))}

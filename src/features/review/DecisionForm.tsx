@@ -3,6 +3,7 @@ import { useForm, useWatch } from 'react-hook-form';
 import { z } from 'zod';
 
 import type { Review } from '#shared/contracts/reviews.ts';
+import { sentenceOf } from '#src/lib/api.ts';
 import { approvalHindrances, openCautions } from './review-progress.ts';
 
 const decisionForm = z
@@ -56,7 +57,7 @@ export function DecisionForm({ review, onDecide }: DecisionFormProps) {
       });
     } catch (error) {
       setError('root', {
-        message: error instanceof Error ? error.message : 'The decision could not be sent.',
+        message: sentenceOf(error),
       });
     }
   });

@@ -2,12 +2,14 @@ import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 
 import type { Review } from '#shared/contracts/reviews.ts';
+import { sentenceOf } from '#src/lib/api.ts';
 import { reviewCalls, reviewQuery } from './api.ts';
 import { CommentsPanel } from './CommentsPanel.tsx';
 import { DecisionForm } from './DecisionForm.tsx';
 import { ReviewHeader } from './ReviewHeader.tsx';
 import { anchorsOf, ReviewReveal } from './ReviewReveal.tsx';
 import { ReviewWorking } from './ReviewWorking.tsx';
+import './review.css';
 import type { ReviewSlots } from './slots.ts';
 
 export interface ReviewDeskProps {
@@ -38,9 +40,7 @@ export function ReviewDesk({ review, onReleased, slots }: ReviewDeskProps) {
     setProblem(null);
     request()
       .then(() => after?.())
-      .catch((error: unknown) =>
-        setProblem(error instanceof Error ? error.message : 'This could not be done.'),
-      )
+      .catch((error: unknown) => setProblem(sentenceOf(error)))
       .finally(() => setBusy(false));
   };
 

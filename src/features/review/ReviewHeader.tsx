@@ -1,4 +1,5 @@
 import type { Review } from '#shared/contracts/reviews.ts';
+import { countOf, formatDay } from '#src/lib/format.ts';
 
 const STAGES: Readonly<Record<Review['stage'], string>> = {
   waiting: 'Waiting for a reviewer',
@@ -11,8 +12,6 @@ const DECISIONS = {
   returned: 'Returned to the writer',
   recalled: 'Taken back by the writer',
 } as const;
-
-const day = new Intl.DateTimeFormat('en-GB', { dateStyle: 'medium' });
 
 /** What is under review, at which stage, for whom and until when; and the writer's note. */
 export function ReviewHeader({ review }: { review: Review }) {
@@ -27,11 +26,11 @@ export function ReviewHeader({ review }: { review: Review }) {
         <span>{stage}</span>
         <span className="text-muted">Revision {review.revision}</span>
         <span className="text-muted">{review.topic.name}</span>
-        <span className="text-muted">{review.marks === 1 ? '1 mark' : `${review.marks} marks`}</span>
+        <span className="text-muted">{countOf(review.marks, 'mark')}</span>
         <span className="text-muted">
-          sent by {review.requestedBy.name}, {day.format(new Date(review.requestedAt))}
+          sent by {review.requestedBy.name}, {formatDay(review.requestedAt)}
         </span>
-        {review.dueOn !== null && <span>wanted by {day.format(new Date(review.dueOn))}</span>}
+        {review.dueOn !== null && <span>wanted by {formatDay(review.dueOn)}</span>}
       </p>
       {review.note !== '' && <p className="mt-2 max-w-prose">{review.note}</p>}
       {review.decision !== null && review.decisionReason !== '' && (

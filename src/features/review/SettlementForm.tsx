@@ -1,6 +1,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
+import { sentenceOf } from '#src/lib/api.ts';
 
 import type { PartProgress } from './review-progress.ts';
 
@@ -26,7 +27,7 @@ export function SettlementForm({ part, onSettle }: SettlementFormProps) {
     try {
       await onSettle(part.partId, reason);
     } catch (error) {
-      setError('reason', { message: error instanceof Error ? error.message : 'This could not be sent.' });
+      setError('reason', { message: sentenceOf(error) });
     }
   });
   return (

@@ -1,6 +1,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
+import { sentenceOf } from '#src/lib/api.ts';
 
 import type { PartProgress } from './review-progress.ts';
 
@@ -38,7 +39,7 @@ export function WorkingForm({ part, busy, onTry, onDispute }: WorkingFormProps) 
       await onTry(part.partId, text);
       reset();
     } catch (error) {
-      setError('text', { message: error instanceof Error ? error.message : 'This could not be sent.' });
+      setError('text', { message: sentenceOf(error) });
     }
   });
   const open = part.state === 'open' && part.triesLeft > 0;

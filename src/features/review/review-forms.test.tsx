@@ -5,6 +5,7 @@ import { afterEach, describe, expect, it, vi } from 'vitest';
 
 import type { Review } from '#shared/contracts/reviews.ts';
 import { itemContentSchema, type Finding } from '#shared/engine/index.ts';
+import { AppError } from '#shared/errors/app-error.ts';
 import { CommentsPanel } from './CommentsPanel.tsx';
 import { DecisionForm } from './DecisionForm.tsx';
 import type { PartProgress } from './review-progress.ts';
@@ -44,7 +45,9 @@ describe('the form for one’s own working', () => {
 
   it('shows a refusal where it was caused', async () => {
     const user = userEvent.setup();
-    const onTry = vi.fn(() => Promise.reject(new Error('Two different values stand in this answer.')));
+    const onTry = vi.fn(() =>
+      Promise.reject(new AppError('invalid', 'Two different values stand in this answer.')),
+    );
     render(<WorkingForm part={part} busy={false} onTry={onTry} onDispute={vi.fn()} />);
     await user.type(screen.getByLabelText('My answer, with its unit'), '1 or 2 V{Enter}');
     expect((await screen.findByRole('alert')).textContent).toBe('Two different values stand in this answer.');

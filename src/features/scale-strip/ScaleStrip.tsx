@@ -4,11 +4,12 @@ import type { PartScale } from '#shared/engine/index.ts';
 import { RELATIVE_AXIS, unitAxis, printedUnit } from './axis.ts';
 import { BandFields } from './BandFields.tsx';
 import { bandInterval, scaleRange, stripGeometry, type Interval } from './geometry.ts';
+import './scale-strip.css';
 import { ScaleTable } from './ScaleTable.tsx';
 import { StripPicture } from './StripPicture.tsx';
 import { movedEnd, takesAllRoutes, withTrialBand } from './trial.ts';
 import { useWidth } from './use-width.ts';
-import { bandVerdict, describeMark, describeScale } from './words.ts';
+import { bandVerdict, describeMark, describeScale, unbroken } from './words.ts';
 
 export interface ScaleStripProps {
   scale: PartScale;
@@ -64,7 +65,7 @@ export function ScaleStrip({
   const routesFit = takesAllRoutes(scale, band);
 
   return (
-    <section aria-labelledby={heading} className="scale-strip" ref={container}>
+    <section aria-labelledby={heading} className="scale-strip grid gap-1" ref={container}>
       <h4 id={heading} className="sr-only">
         Scale of {name}
       </h4>
@@ -85,11 +86,12 @@ export function ScaleStrip({
         <p className="min-h-10 flex-1 basis-80 text-muted" aria-hidden="true">
           {activeMark === undefined
             ? trial === null
-              ? `${bandVerdict(scale)} ${scale.recommended.reason}`
+              ? unbroken(`${bandVerdict(scale)} ${scale.recommended.reason}`)
               : `Trying ${axis.valueText(band.low)} to ${axis.valueText(band.high)}. ${routesFit ? 'Every rounding route lies inside.' : 'Some rounding routes lie outside.'}`
             : describeMark(activeMark)}
         </p>
         <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1">
+          <span className="text-muted">{axis.caption}</span>
           {canUseUnit && scale.unit !== '' && (
             <button type="button" className="link" aria-pressed={inUnit} onClick={() => setInUnit(!inUnit)}>
               {inUnit ? 'Show in %' : `Show in ${printedUnit(scale.unit)}`}

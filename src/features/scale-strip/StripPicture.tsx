@@ -3,7 +3,7 @@ import { useRef, type KeyboardEvent } from 'react';
 import type { Axis } from './axis.ts';
 import { BandEnd } from './BandEnd.tsx';
 import { xToError, type Interval, type StripGeometry } from './geometry.ts';
-import { placeLabels } from './lanes.ts';
+import { labelWidth, placeLabels, shortened } from './lanes.ts';
 import { MarkGlyph } from './MarkGlyph.tsx';
 import { keyStep } from './trial.ts';
 import { describeMark, percentText } from './words.ts';
@@ -24,7 +24,7 @@ interface StripPictureProps {
 
 const LANE = 16;
 const RULE_ROOM = 22;
-const SCALE_ROOM = 34;
+const SCALE_ROOM = 28;
 
 /** One stop of the keyboard: what it says, and the mark that it lights. */
 interface Stop {
@@ -59,13 +59,28 @@ function stopsOf(geometry: StripGeometry): Stop[] {
   return [...low, ...marks, ...high];
 }
 
+/** What stands above each end that has gathered marks: the nearest of them and how far off it is. */
+function endLabelsOf({ gathered, width }: StripGeometry): { side: 'low' | 'high'; text: string }[] {
+  return gathered.flatMap(({ side, marks }) => {
+    const nearest = marks[0]?.mark;
+    if (nearest === undefined) return [];
+    const distance = percentText(nearest.relativeError);
+    const room = width / (gathered.length === 1 ? 1.5 : 2.2) - labelWidth(` ${distance}`);
+    return [{ side, text: `${shortened(nearest.label, room)} ${distance}` }];
+  });
+}
+
 /** The drawing of a scale strip. Left and Right go from mark to mark; Enter goes to the mark's draw. */
 export function StripPicture(props: StripPictureProps) {
   const { geometry, axis, band, active, onActive, onMove, onSettle, onVisitDraw } = props;
   const svg = useRef<SVGSVGElement>(null);
   const { width, centre, left, right, range } = geometry;
-  const labels = placeLabels(geometry.marks, width, width < 480 ? 3 : 4);
-  const lanes = labels.reduce((most, label) => Math.max(most, label.lane + 1), 0);
+  const endLabels = endLabelsOf(geometry);
+  const reserved = endLabels.map(({ text, side }) =>
+    side === 'low' ? { from: 0, to: labelWidth(text) } : { from: width - labelWidth(text), to: width },
+  );
+  const labels = placeLabels(geometry.marks, width, width < 480 ? 3 : 4, reserved);
+  const lanes = labels.reduce((most, label) => Math.max(most, label.lane + 1), endLabels.length > 0 ? 1 : 0);
   const ruleY = lanes * LANE + RULE_ROOM;
   const height = ruleY + SCALE_ROOM;
   const stops = stopsOf(geometry);
@@ -140,9 +155,6 @@ export function StripPicture(props: StripPictureProps) {
           </text>
         ))}
       <line x1={centre} x2={centre} y1={ruleY - 20} y2={ruleY + 12} className="strip-centre" />
-      <text x={right + 2} y={height - 2} textAnchor="end" className="strip-caption" aria-hidden="true">
-        {axis.caption}
-      </text>
       <line
         x1={geometry.routeSpread.x1}
         x2={geometry.routeSpread.x2}
@@ -150,6 +162,18 @@ export function StripPicture(props: StripPictureProps) {
         y2={ruleY - 3}
         className={props.routesFit ? 'strip-spread' : 'strip-spread strip-outside'}
       />
+      {endLabels.map(({ side, text }) => (
+        <text
+          key={side}
+          x={side === 'low' ? 0 : width}
+          y={ruleY - RULE_ROOM - 2}
+          textAnchor={side === 'low' ? 'start' : 'end'}
+          className="strip-label"
+          aria-hidden="true"
+        >
+          {text}
+        </text>
+      ))}
       {labels.map((label) => {
         const placed = geometry.marks.find((mark) => mark.index === label.index);
         const y = ruleY - RULE_ROOM - label.lane * LANE;

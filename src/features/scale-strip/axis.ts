@@ -4,7 +4,7 @@ import { percentText } from './words.ts';
 /** What the numbers of a strip are written in. */
 export interface Axis {
   kind: 'relative' | 'unit';
-  /** Stands beside the numbers: “% from the model answer”, or the unit. */
+  /** Stands beside the numbers: “error in %”, or the unit. */
   caption: string;
   /** The number under a tick. */
   tickText: (error: number) => string;
@@ -28,7 +28,7 @@ function typedNumber(text: string): number | null {
 /** Relative errors in percent. */
 export const RELATIVE_AXIS: Axis = {
   kind: 'relative',
-  caption: '% from the model answer',
+  caption: 'error in %',
   tickText: (error) => percentText(error, 3).replace('\u202f%', ''),
   valueText: (error) => percentText(error, 3),
   toTyped: (error) => String(Number((error * 100).toPrecision(4))),

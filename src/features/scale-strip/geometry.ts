@@ -37,7 +37,7 @@ export interface StripGeometry {
   ticks: { x: number; value: number; major: boolean }[];
   band: { x1: number; x2: number };
   routeSpread: { x1: number; x2: number };
-  /** x of each rounding route's hairline. */
+  /** x of each rounding route's hairline: the furthest that it gets, held to the scale's ends. */
   routes: { index: number; mark: StripMark; x: number }[];
   marks: PlacedMark[];
   gathered: GatheredMarks[];
@@ -119,10 +119,12 @@ export function stripGeometry(
   const routes: StripGeometry['routes'] = [];
   const marks: PlacedMark[] = [];
   scale.marks.forEach((mark, index) => {
-    if (!(Math.abs(mark.relativeError) <= range)) return;
-    const x = at(mark.relativeError);
-    if (mark.kind === 'route') routes.push({ index, mark, x });
-    else marks.push({ index, mark, x, direction: directionOf(mark), reach: held(mark.furthest) });
+    if (mark.kind === 'route') {
+      routes.push({ index, mark, x: held(mark.furthest) });
+    } else if (Math.abs(mark.relativeError) <= range) {
+      const x = at(mark.relativeError);
+      marks.push({ index, mark, x, direction: directionOf(mark), reach: held(mark.furthest) });
+    }
   });
   marks.sort((a, b) => a.x - b.x);
   const majors = width < 480 ? 4 : 8;

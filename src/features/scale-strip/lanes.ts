@@ -14,9 +14,21 @@ export interface LabelPlace {
 const LETTER = 6.6;
 const GAP = 14;
 
-function shortened(text: string, room: number): string {
+/** The text cut to `room` pixels, with an ellipsis where something is left out. */
+export function shortened(text: string, room: number): string {
   const letters = Math.floor(room / LETTER);
   return text.length <= letters ? text : `${text.slice(0, Math.max(1, letters - 1)).trimEnd()}…`;
+}
+
+/** A stretch of a line, in pixels. */
+export interface Stretch {
+  from: number;
+  to: number;
+}
+
+/** How wide a label is about, in pixels. */
+export function labelWidth(text: string): number {
+  return text.length * LETTER;
 }
 
 /** How much a mark wants its label: those inside the band first, then slips, then the nearest. */
@@ -27,10 +39,15 @@ function urgency(mark: PlacedMark): number {
 
 /**
  * Places labels on up to `lanes` lines so that none covers another. A label runs away from its mark towards
- * the side with more room; one that finds no line has none (its mark still has its full description).
+ * the side with more room; one that finds no line has none (its mark still has its full description). `reserved` is taken on the line next to the scale.
  */
-export function placeLabels(marks: readonly PlacedMark[], width: number, lanes: number): LabelPlace[] {
-  const taken: { from: number; to: number }[][] = Array.from({ length: lanes }, () => []);
+export function placeLabels(
+  marks: readonly PlacedMark[],
+  width: number,
+  lanes: number,
+  reserved: readonly Stretch[] = [],
+): LabelPlace[] {
+  const taken: Stretch[][] = Array.from({ length: lanes }, (_, lane) => (lane === 0 ? [...reserved] : []));
   const places: LabelPlace[] = [];
   for (const placed of [...marks].sort((a, b) => urgency(a) - urgency(b))) {
     const anchor = placed.x < width / 2 ? 'start' : 'end';

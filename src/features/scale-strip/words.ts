@@ -1,26 +1,34 @@
-import type { PartScale, StripMark } from '#shared/engine/index.ts';
+import { formatNumber, type PartScale, type StripMark } from '#shared/engine/index.ts';
 import type { Interval } from './geometry.ts';
 
-const MINUS = '−';
+/** Narrow space that never breaks. */
+const SPACE = '\u202f';
 
-/** A number with so many significant figures at most, a real minus sign and no trailing zeros. */
-function plain(value: number, figures: number): string {
-  const magnitude = Math.abs(value);
-  if (magnitude !== 0 && (magnitude >= 1e4 || magnitude < 1e-3)) {
-    const [lead, power] = magnitude.toExponential(figures - 1).split('e');
-    const sign = value < 0 ? MINUS : '';
-    return `${sign}${lead ?? ''} × 10^${String(Number(power)).replace('-', MINUS)}`;
-  }
-  const text = String(Number(magnitude.toPrecision(figures)));
-  return value < 0 && Number(text) !== 0 ? `${MINUS}${text}` : text;
-}
+/** From this relative error on (1,000 %) a ratio says more than a percentage. */
+const AS_RATIO = 10;
 
-/** A relative error as a signed percentage: 0.021 gives “+2.1 %”. Two figures, more near the band's ends. */
+/**
+ * A relative error as a signed percentage: 0.021 gives “+2.1 %”; one that is far too large as how many times
+ * the model answer it is.
+ */
 export function percentText(error: number, figures = 2): string {
   if (!Number.isFinite(error)) return 'without limit';
-  const percent = error * 100;
-  const text = plain(percent, Math.abs(percent) >= 100 ? 3 : figures);
-  return `${percent > 0 && text !== '0' ? '+' : ''}${text}\u202f%`;
+  if (Math.abs(error) >= AS_RATIO) return `${formatNumber(1 + error, { figures: 2 }).text} times`;
+  const percent = Number((error * 100).toPrecision(Math.abs(error) >= 1 ? 3 : figures));
+  const text = formatNumber(percent, { figures: figuresOf(percent) }).text;
+  return `${percent > 0 ? '+' : ''}${text}${SPACE}%`;
+}
+
+/** Figures that a number needs when it is written without trailing zeros. */
+function figuresOf(value: number): number {
+  const digits = value.toExponential().split('e')[0]?.replace(/\D/g, '') ?? '1';
+  const power = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+  return Math.max(digits.length, power < 5 ? power + 1 : 1);
+}
+
+/** A sentence of the checker with a space before “%” at which no line breaks. */
+export function unbroken(sentence: string): string {
+  return sentence.replace(/(\d) %/g, `$1${SPACE}%`);
 }
 
 const KIND: Readonly<Record<StripMark['kind'], string>> = {
@@ -36,11 +44,13 @@ export function kindName(mark: StripMark): string {
 
 /** One mark in a sentence, as a screen reader says it and as the line under the strip shows it. */
 export function describeMark(mark: StripMark): string {
+  if (mark.kind === 'route') {
+    return `${KIND.route}: ${mark.label}, at its furthest ${percentText(mark.furthest, 3)} from the model answer, draw ${mark.draw}.`;
+  }
   const where =
     mark.relativeError === 0
       ? 'equal to the model answer'
       : `${percentText(mark.relativeError, 3)} from the model answer`;
-  if (mark.kind === 'route') return `${KIND.route}: ${mark.label}, ${where}, draw ${mark.draw}.`;
   const verdict = mark.insideBand ? 'inside the band, so it would earn the marks' : 'outside the band';
   const far =
     mark.furthest === mark.relativeError ? '' : `, at its furthest ${percentText(mark.furthest, 3)}`;

@@ -70,6 +70,7 @@ export function ScriptEditor(props: ScriptEditorProps) {
         autocompletion: false,
         searchKeymap: false,
         lintKeymap: true,
+        syntaxHighlighting: false,
       }}
       extensions={extensions}
       className="script-editor"

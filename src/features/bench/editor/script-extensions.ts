@@ -1,8 +1,10 @@
 import { autocompletion, type CompletionContext, type CompletionResult } from '@codemirror/autocomplete';
 import { javascriptLanguage } from '@codemirror/lang-javascript';
+import { HighlightStyle, syntaxHighlighting } from '@codemirror/language';
 import { lintGutter, type Diagnostic } from '@codemirror/lint';
 import type { Extension } from '@codemirror/state';
 import { EditorView, hoverTooltip } from '@codemirror/view';
+import { tags } from '@lezer/highlight';
 
 import type { QuantityRow } from '#shared/contracts/checking.ts';
 import { explain, proposals } from './completions.ts';
@@ -15,6 +17,13 @@ const TYPES = {
   keyword: 'keyword',
   unit: 'type',
 } as const;
+
+/** The script in the theme's own inks: remarks quiet, numbers and functions set off a little. */
+const INK = HighlightStyle.define([
+  { tag: tags.comment, color: 'var(--color-muted)', fontStyle: 'italic' },
+  { tag: tags.number, color: 'var(--color-accent)' },
+  { tag: [tags.function(tags.variableName), tags.keyword], fontWeight: '600' },
+]);
 
 /** Letters of a name or unit, with micro in both code points. */
 const WORD = /[A-Za-zµμΩÅ°_][A-Za-z0-9_]*/;
@@ -77,6 +86,7 @@ function hover(rows: () => readonly QuantityRow[]): Extension {
 export function scriptExtensions(rows: () => readonly QuantityRow[], label: string): Extension[] {
   return [
     javascriptLanguage,
+    syntaxHighlighting(INK),
     autocompletion({ override: [complete(rows)], icons: false }),
     hover(rows),
     lintGutter(),

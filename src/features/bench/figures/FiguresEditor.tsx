@@ -1,6 +1,7 @@
 import { useRef, useState, type DragEvent } from 'react';
 
 import { ITEM_LIMITS, partLetter, type ItemContent, type ItemFigure } from '#shared/engine/index.ts';
+import { sentenceOf } from '#src/lib/api.ts';
 import { NumberInput } from '../inputs/NumberInput.tsx';
 import { fileRefusal, pictureOf } from './check-file.ts';
 
@@ -33,7 +34,7 @@ export function FiguresEditor(props: FiguresEditorProps) {
     try {
       onAdd(await onUpload(file));
     } catch (error) {
-      setRefusal(error instanceof Error ? error.message : 'The figure could not be sent.');
+      setRefusal(sentenceOf(error));
     } finally {
       setBusy(null);
     }

@@ -17,6 +17,7 @@ interface NumberInputProps {
   /** Shown while the field is empty. */
   placeholder?: string;
   suffix?: string;
+  narrow?: boolean;
   className?: string;
 }
 
@@ -51,7 +52,7 @@ export function NumberInput(props: NumberInputProps) {
         <input
           id={id}
           inputMode="decimal"
-          className="field w-20 font-mono text-sm tabular-nums"
+          className={`field font-mono text-sm tabular-nums ${props.narrow === true ? 'w-14' : 'w-20'}`}
           value={shown}
           disabled={disabled}
           placeholder={props.placeholder}

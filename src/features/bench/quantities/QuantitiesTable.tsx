@@ -35,7 +35,7 @@ export function QuantitiesTable(props: QuantitiesTableProps) {
     placeholder: string,
   ) => (
     <input
-      className="field w-full min-w-14 font-mono text-sm"
+      className={`field w-full font-mono text-sm ${key === 'unit' ? 'min-w-24' : key === 'set' ? 'min-w-10' : 'min-w-16'}`}
       aria-label={`${label} of ${row.name}`}
       value={quantityOf(content, row.name)[key]}
       placeholder={placeholder}
@@ -81,6 +81,7 @@ export function QuantitiesTable(props: QuantitiesTableProps) {
                   <NumberInput
                     label={`Significant figures of ${row.name}`}
                     labelHidden
+                    narrow
                     value={quantity.figures}
                     placeholder="auto"
                     least={1}

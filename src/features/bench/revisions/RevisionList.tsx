@@ -3,6 +3,8 @@ import { useState, type ReactNode } from 'react';
 import { ITEM_STATE_NAMES } from '#shared/domain/item-life.ts';
 import type { Item } from '#shared/contracts/items.ts';
 import type { ItemContent } from '#shared/engine/index.ts';
+import { formatDay } from '#src/lib/format.ts';
+import { sentenceOf } from '#src/lib/api.ts';
 
 type Summary = Pick<Item['revision'], 'id' | 'number' | 'state' | 'author' | 'createdAt' | 'note'>;
 
@@ -16,8 +18,6 @@ interface RevisionListProps {
   renderChanges: (before: ItemContent) => ReactNode;
 }
 
-const day = new Intl.DateTimeFormat('en-GB', { dateStyle: 'medium' });
-
 /** The item's revisions, newest first; each older one can be compared with the one on the bench. */
 export function RevisionList({ revisions, current, onOpen, renderChanges }: RevisionListProps) {
   const [open, setOpen] = useState<{ number: number; content: ItemContent | null; problem: string } | null>(
@@ -28,7 +28,7 @@ export function RevisionList({ revisions, current, onOpen, renderChanges }: Revi
     try {
       setOpen({ number, content: await onOpen(number), problem: '' });
     } catch (error) {
-      const problem = error instanceof Error ? error.message : 'The revision could not be opened.';
+      const problem = sentenceOf(error);
       setOpen({ number, content: null, problem });
     }
   };
@@ -43,7 +43,7 @@ export function RevisionList({ revisions, current, onOpen, renderChanges }: Revi
               <span>{ITEM_STATE_NAMES[revision.state]}</span>
               <span className="text-muted">
                 {revision.author.name},{' '}
-                <time dateTime={revision.createdAt}>{day.format(new Date(revision.createdAt))}</time>
+                <time dateTime={revision.createdAt}>{formatDay(revision.createdAt)}</time>
               </span>
               {revision.number !== current && (
                 <button

@@ -1,6 +1,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
+import { sentenceOf } from '#src/lib/api.ts';
 
 const reasonForm = z.object({
   reason: z.string().trim().min(1, 'Say why, in a few words.').max(2_000, 'At most 2,000 characters.'),
@@ -26,7 +27,7 @@ export function ReasonForm({ explanation, action, onSubmit, onCancel }: ReasonFo
     try {
       await onSubmit(reason);
     } catch (error) {
-      setError('reason', { message: error instanceof Error ? error.message : 'This could not be done.' });
+      setError('reason', { message: sentenceOf(error) });
     }
   });
   return (

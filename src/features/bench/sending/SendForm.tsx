@@ -3,6 +3,7 @@ import { useForm } from 'react-hook-form';
 import { z } from 'zod';
 
 import type { PersonName } from '#shared/contracts/people.ts';
+import { sentenceOf } from '#src/lib/api.ts';
 
 const sendForm = z.object({
   note: z.string().trim().max(2_000, 'At most 2,000 characters.'),
@@ -40,7 +41,7 @@ export function SendForm({ reviewers, onSend, onCancel }: SendFormProps) {
         dueOn: dueOn === '' ? null : dueOn,
       });
     } catch (error) {
-      setError('root', { message: error instanceof Error ? error.message : 'The item could not be sent.' });
+      setError('root', { message: sentenceOf(error) });
     }
   });
   return (

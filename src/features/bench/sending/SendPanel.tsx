@@ -3,6 +3,7 @@ import { useEffect, useEffectEvent, useState } from 'react';
 import type { StoredAssay } from '#shared/contracts/items.ts';
 import type { PersonName } from '#shared/contracts/people.ts';
 import type { ItemContent } from '#shared/engine/index.ts';
+import { sentenceOf } from '#src/lib/api.ts';
 import { findingTarget, isAccepted, type FindingTarget } from '../findings/group-findings.ts';
 import { SendForm, type Sending } from './SendForm.tsx';
 
@@ -28,7 +29,7 @@ export function SendPanel(props: SendPanelProps) {
       const stored = await props.onAssay();
       if (isCurrent()) setStage({ kind: 'ready', assay: stored });
     } catch (error) {
-      const message = error instanceof Error ? error.message : 'The assay could not be run.';
+      const message = sentenceOf(error);
       if (isCurrent()) setStage({ kind: 'failed', message });
     }
   });
