@@ -54,7 +54,7 @@ export const ROLES_OF_QUANTITIES: readonly RoleRow[] = [
   row('dropDiameter', 'diameter of drop', 'm', 'of a spherical drop'),
   row('dropMass', 'mass of drop', 'kg', 'of a spherical drop'),
   row('dropDensity', 'density of liquid', 'kg m^-3', 'of the drop'),
-  row('airDensity', 'density of air', 'kg m^-3', 'round the drop'),
+  row('airDensity', 'density of the fluid', 'kg m^-3', 'air or liquid round the drop'),
   row('weight', 'weight', 'N', 'of the drop'),
   row('viscosity', 'viscosity', 'Pa s', 'of the air or liquid'),
   row('terminalSpeed', 'terminal speed', 'm s^-1', 'of a drop or ball that falls steadily'),
