@@ -1,0 +1,153 @@
+import { createColumnHelper, flexRender, getCoreRowModel, useReactTable } from '@tanstack/react-table';
+import type { KeyboardEvent } from 'react';
+import { Link, useNavigate } from 'react-router';
+
+import type { ITEM_SORTS, ItemQuery, ItemRow } from '#shared/contracts/items.ts';
+import { ITEM_STATE_NAMES } from '#shared/domain/item-life.ts';
+import { SeverityWord } from '#src/components/ui/SeverityWord.tsx';
+import { formatDay } from '#src/lib/format.ts';
+
+type Sort = (typeof ITEM_SORTS)[number];
+
+interface BankTableProps {
+  rows: ItemRow[];
+  query: ItemQuery;
+  onSort: (sort: Sort, direction: ItemQuery['direction']) => void;
+}
+
+const column = createColumnHelper<ItemRow>();
+
+function Finding({ row }: { row: ItemRow }) {
+  if (row.assayed === 'never') return <span className="text-muted">not assayed</span>;
+  return (
+    <>
+      <SeverityWord severity={row.worstFinding} />
+      {row.assayed === 'stale' && <span className="text-muted">, stale</span>}
+    </>
+  );
+}
+
+const columns = [
+  column.accessor('code', {
+    header: 'Code',
+    cell: (cell) => (
+      <Link className="link font-mono text-sm" to={`/items/${cell.row.original.id}`}>
+        {cell.getValue()}
+      </Link>
+    ),
+  }),
+  column.accessor('title', { header: 'Title' }),
+  column.accessor((row) => row.topic.name, { id: 'topic', header: 'Topic' }),
+  column.accessor((row) => ITEM_STATE_NAMES[row.state], { id: 'state', header: 'State' }),
+  column.accessor((row) => row.owner.name, { id: 'owner', header: 'Owner' }),
+  column.accessor('marks', { header: 'Marks' }),
+  column.accessor('worstFinding', {
+    header: 'Worst finding',
+    cell: (cell) => <Finding row={cell.row.original} />,
+  }),
+  column.accessor('revision', {
+    header: 'Revision',
+    cell: ({ row: { original } }) =>
+      original.approvedRevision === null || original.approvedRevision === original.revision
+        ? original.revision
+        : `${original.revision}, approved ${original.approvedRevision}`,
+  }),
+  column.accessor('usedOn', {
+    header: 'On papers',
+    cell: (cell) => (cell.getValue() === null ? '' : cell.getValue()),
+  }),
+  column.accessor('updatedAt', {
+    id: 'updated',
+    header: 'Changed',
+    cell: (cell) => formatDay(cell.getValue()),
+  }),
+];
+
+const SORTABLE = new Set<string>([
+  'code',
+  'title',
+  'topic',
+  'state',
+  'owner',
+  'marks',
+  'updated',
+] satisfies Sort[]);
+const NUMBERS = new Set(['marks', 'revision', 'usedOn']);
+
+/** Up and down go from row to row; each row's link is its own stop. */
+function moveRow(event: KeyboardEvent<HTMLTableSectionElement>): void {
+  if (event.key !== 'ArrowDown' && event.key !== 'ArrowUp') return;
+  const links = Array.from(event.currentTarget.querySelectorAll('a'));
+  const at = links.indexOf(document.activeElement as HTMLAnchorElement);
+  const next = links[at + (event.key === 'ArrowDown' ? 1 : -1)];
+  if (at < 0 || next === undefined) return;
+  event.preventDefault();
+  next.focus();
+}
+
+/** One page of the bank. */
+export function BankTable({ rows, query, onSort }: BankTableProps) {
+  const navigate = useNavigate();
+  const table = useReactTable({
+    data: rows,
+    columns,
+    getCoreRowModel: getCoreRowModel(),
+    manualSorting: true,
+  });
+  const ariaSort = (id: string) => (query.sort === id ? query.direction : 'none');
+  return (
+    <div className="overflow-x-auto">
+      <table className="list-table">
+        <thead>
+          <tr>
+            {table.getFlatHeaders().map((header) => (
+              <th
+                key={header.id}
+                scope="col"
+                aria-sort={ariaSort(header.id)}
+                className={NUMBERS.has(header.id) ? 'number' : ''}
+              >
+                {SORTABLE.has(header.id) ? (
+                  <button
+                    type="button"
+                    className="cursor-pointer font-semibold hover:underline"
+                    onClick={() =>
+                      onSort(
+                        header.id as Sort,
+                        query.sort === header.id && query.direction === 'ascending'
+                          ? 'descending'
+                          : 'ascending',
+                      )
+                    }
+                  >
+                    {flexRender(header.column.columnDef.header, header.getContext())}
+                    <span aria-hidden="true" className="text-muted">
+                      {query.sort === header.id ? (query.direction === 'ascending' ? ' ↑' : ' ↓') : ''}
+                    </span>
+                  </button>
+                ) : (
+                  flexRender(header.column.columnDef.header, header.getContext())
+                )}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody onKeyDown={moveRow}>
+          {table.getRowModel().rows.map((row) => (
+            <tr
+              key={row.id}
+              className="cursor-pointer"
+              onClick={() => void navigate(`/items/${row.original.id}`)}
+            >
+              {row.getVisibleCells().map((cell) => (
+                <td key={cell.id} className={NUMBERS.has(cell.column.id) ? 'number' : ''}>
+                  {flexRender(cell.column.columnDef.cell, cell.getContext())}
+                </td>
+              ))}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
