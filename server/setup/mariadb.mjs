@@ -32,6 +32,14 @@ async function initialise(folder) {
   renameSync(side, folder);
 }
 
+/** A short-named folder for this run; `note` remembers it, so that one left by a crash goes away. */
+function makeRunFolder(note) {
+  if (existsSync(note)) rmSync(readFileSync(note, 'utf8'), { recursive: true, force: true });
+  const folder = mkdtempSync(path.join(tmpdir(), 'graticule-'));
+  writeFileSync(note, folder);
+  return folder;
+}
+
 /**
  * @typedef {object} Mariadb
  * @property {number} port
@@ -58,7 +66,7 @@ export async function startMariadb({ folder, statements, args = [] }) {
 
   const port = await keptPort(`${folder}.port`);
   // A socket's path must be short, which the project's own need not be.
-  const run = mkdtempSync(path.join(tmpdir(), 'graticule-'));
+  const run = makeRunFolder(`${folder}.run`);
   const socket = path.join(run, 'mariadb.sock');
   const init = path.join(run, 'init.sql');
   writeFileSync(init, statements.map((statement) => `${statement};\n`).join(''), { mode: 0o600 });

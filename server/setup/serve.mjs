@@ -29,15 +29,16 @@ export function endOrphanedServer(pidFile, script) {
  * Starts a program that serves /api/health on `port`, in a process group of its own, and waits until it is ready.
  * @param {object} options
  * @param {readonly string[]} options.args arguments of node; the script's path within the project last
+ * @param {readonly string[]} [options.tail] arguments of the script
  * @param {NodeJS.ProcessEnv} options.env
  * @param {number} options.port
  * @param {string} options.pidFile
  * @returns {Promise<{ ended: Promise<number>, stop: () => Promise<void> }>}
  * @throws {SetupError} when it ends or stays silent for a minute
  */
-export async function startServer({ args, env, port, pidFile }) {
+export async function startServer({ args, tail = [], env, port, pidFile }) {
   const script = inProject(args.at(-1));
-  const child = spawn(process.execPath, [...args.slice(0, -1), script], {
+  const child = spawn(process.execPath, [...args.slice(0, -1), script, ...tail], {
     cwd: inProject(),
     env,
     detached: true,

@@ -1,34 +1,21 @@
-import { rmSync } from 'node:fs';
-
 import { ensureBuilt } from './build.mjs';
+import { claimProject } from './claim.mjs';
 import { ensureDebianPackages, toServe } from './debian-packages.mjs';
 import { choosePort, prepareDatabase, productEnvironment, provideDatabase } from './environment.mjs';
 import { ensureNpmPackages } from './npm-packages.mjs';
-import { inData, inProject, makeDataFolder } from './places.mjs';
-import { processOf, writePidFile } from './processes.mjs';
+import { inData, inProject } from './places.mjs';
 import { main, say, SetupError } from './say.mjs';
 import { endOrphanedServer, startServer } from './serve.mjs';
 import { showSignIns } from './sign-ins.mjs';
 import { createStoppers } from './stoppers.mjs';
 
 const SERVER = 'dist/server/main.js';
-const ownPidFile = inData('start.pid');
 const serverPidFile = inData('server.pid');
 
-/** One start at a time: a second would take the first one's processes for orphans. */
-function claim() {
-  makeDataFolder();
-  const other = processOf(ownPidFile, 'setup/start.mjs') ?? processOf(ownPidFile, 'setup/dev.mjs');
-  if (other !== null) {
-    throw new SetupError(`The project already runs here as process ${other}. Stop that first.`);
-  }
-  writePidFile(ownPidFile, process.pid);
-}
-
 await main(async () => {
-  claim();
+  const unclaim = claimProject();
   const stoppers = createStoppers();
-  stoppers.add(async () => rmSync(ownPidFile, { force: true }));
+  stoppers.add(unclaim);
   try {
     await endOrphanedServer(serverPidFile, SERVER);
     const port = await choosePort();
@@ -49,7 +36,7 @@ await main(async () => {
     });
     stoppers.add(server.stop);
     say(`Graticule is at http://${process.env['HOST'] || 'localhost'}:${port}`);
-    await showSignIns();
+    await showSignIns((url) => import(url), 'dist/server/demo-people.js');
     say('Ctrl-C stops it.');
 
     const ended = await Promise.race([server.ended, database.ended]);
