@@ -18,12 +18,13 @@ function account(name, password, rights, scope) {
  * application only reads and writes rows.
  * @returns {Promise<import('./mariadb.mjs').Mariadb & { ownerUrl: string, applicationUrl: string }>}
  */
-export async function startBankDatabase() {
+export async function startBankDatabase(stoppers) {
   makeDataFolder();
   const ownerPassword = keptSecret('database-owner-password');
   const applicationPassword = keptSecret('database-application-password');
   const mariadb = await startMariadb({
     folder: inData('mariadb'),
+    stoppers,
     statements: [
       `create database if not exists ${DATABASE} character set utf8mb4 collate utf8mb4_unicode_ci`,
       ...account('graticule_owner', ownerPassword, 'all privileges', `${DATABASE}.*`),

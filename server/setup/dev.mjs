@@ -50,8 +50,8 @@ await main(async () => {
       env,
       port: apiPort,
       pidFile,
+      stoppers,
     });
-    stoppers.add(server.stop);
     const vite = startVite(env, port, apiPort);
     stoppers.add(vite.stop);
     const { tsImport } = await import('tsx/esm/api');

@@ -30,9 +30,7 @@ export async function choosePort() {
 export async function provideDatabase(stoppers) {
   const given = process.env['DATABASE_URL'];
   if (given) return { ownerUrl: given, applicationUrl: given, ended: new Promise(() => {}) };
-  const database = await startBankDatabase();
-  stoppers.add(database.stop);
-  return database;
+  return startBankDatabase(stoppers);
 }
 
 /** The environment of every program of the product, from the caller's and the data folder. */

@@ -45,7 +45,6 @@ function makeRunFolder(note) {
  * @property {number} port
  * @property {string} socket
  * @property {Promise<number>} ended its exit code, when it has ended for whatever reason
- * @property {() => Promise<void>} stop
  */
 
 /**
@@ -55,11 +54,12 @@ function makeRunFolder(note) {
  * @param {object} options
  * @param {string} options.folder absolute; made and filled when missing
  * @param {readonly string[]} options.statements SQL run before the first connection is taken
+ * @param {ReturnType<typeof import('./stoppers.mjs').createStoppers>} options.stoppers learns how to stop it
  * @param {readonly string[]} [options.args] further arguments
  * @returns {Promise<Mariadb>} once it takes connections
  * @throws {SetupError} when it does not come up, with the end of its log
  */
-export async function startMariadb({ folder, statements, args = [] }) {
+export async function startMariadb({ folder, statements, stoppers, args = [] }) {
   const pidFile = `${folder}.pid`;
   await endOrphan(pidFile, `--datadir=${folder}`, STOP_PATIENCE);
   if (!existsSync(folder)) await initialise(folder);
@@ -106,10 +106,11 @@ export async function startMariadb({ folder, statements, args = [] }) {
     await ended;
   };
 
+  stoppers.add(stop);
+
   if (!(await waitForGreeting(port, () => gone, START_PATIENCE))) {
-    await stop();
     const end = readFileSync(log, 'utf8').trim().split('\n').slice(-8).join('\n');
     throw new SetupError(`MariaDB did not start. Its log ends:\n${end}`);
   }
-  return { port, socket, ended, stop };
+  return { port, socket, ended };
 }

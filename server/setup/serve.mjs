@@ -33,10 +33,11 @@ export function endOrphanedServer(pidFile, script) {
  * @param {NodeJS.ProcessEnv} options.env
  * @param {number} options.port
  * @param {string} options.pidFile
- * @returns {Promise<{ ended: Promise<number>, stop: () => Promise<void> }>}
+ * @param {ReturnType<typeof import('./stoppers.mjs').createStoppers>} options.stoppers learns how to stop it
+ * @returns {Promise<{ ended: Promise<number> }>}
  * @throws {SetupError} when it ends or stays silent for a minute
  */
-export async function startServer({ args, tail = [], env, port, pidFile }) {
+export async function startServer({ args, tail = [], env, port, pidFile, stoppers }) {
   const script = inProject(args.at(-1));
   const child = spawn(process.execPath, [...args.slice(0, -1), script, ...tail], {
     cwd: inProject(),
@@ -56,14 +57,12 @@ export async function startServer({ args, tail = [], env, port, pidFile }) {
     if (!gone) await endProcess(child.pid, STOP_PATIENCE);
     await ended;
   };
+  stoppers.add(stop);
   const limit = Date.now() + START_PATIENCE;
   while (!(await isHealthy(port))) {
     if (gone) throw new SetupError(`${path.basename(script)} ended before it was ready.`);
-    if (Date.now() > limit) {
-      await stop();
-      throw new SetupError(`${path.basename(script)} was not ready within a minute.`);
-    }
+    if (Date.now() > limit) throw new SetupError(`${path.basename(script)} was not ready within a minute.`);
     await pause(100);
   }
-  return { ended, stop };
+  return { ended };
 }

@@ -33,8 +33,8 @@ await main(async () => {
       env: productEnvironment(database.applicationUrl, extra),
       port,
       pidFile: serverPidFile,
+      stoppers,
     });
-    stoppers.add(server.stop);
     say(`Graticule is at http://${process.env['HOST'] || 'localhost'}:${port}`);
     await showSignIns((url) => import(url), 'dist/server/demo-people.js');
     say('Ctrl-C stops it.');
