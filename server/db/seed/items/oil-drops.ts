@@ -97,7 +97,7 @@ N = round(q / e)`,
     topic: 'OD',
     life: 'returned',
     remark:
-      'At this size the drop slips between the molecules of the air, and Stokes’ law is several per cent out. Say in the stem that it may be used, or take larger drops.',
+      'At this size the drop slips between the molecules of the air, and Stokes’ law is several per cent out. The item says that the stem states this simplification, but the stem does not. Add a sentence there, or take larger drops.',
     content: {
       title: 'A drop falling through air',
       stem: 'With the field switched off, a drop of oil of density {{rho}} falls through air at a steady {{v}}. The viscosity of the air is {{eta}}. The upthrust of the air can be left out.',
@@ -113,7 +113,7 @@ W = 4 / 3 * pi * a^3 * rho * g`,
         { name: 'a', symbol: 'a', unit: 'µm', figures: 3, role: 'dropRadius' },
         { name: 'W', symbol: 'W', unit: 'N', figures: 3 },
       ],
-      assumptions: ['noUpthrust'],
+      assumptions: ['noUpthrust', 'noSlipCorrection'],
       parts: [
         {
           id: 'radius',
