@@ -91,6 +91,11 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
     sentenceOf,
   });
   const report = check.report ?? item.assay?.report ?? null;
+  const savedElsewhere =
+    !readOnly &&
+    theirs === null &&
+    autosave.state.phase !== 'saving' &&
+    item.revision.version > autosave.state.version;
   const shownDraw = draw ?? check.view?.draw ?? null;
 
   const renew = async (next: Item): Promise<void> => {
@@ -171,13 +176,21 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
           </button>
         </p>
       )}
+      {savedElsewhere && (
+        <p className="notice" role="status">
+          This draft was saved elsewhere since you opened it.{' '}
+          <button type="button" className="link" onClick={() => setTheirs(item)}>
+            Compare the two versions
+          </button>
+        </p>
+      )}
       {autosave.state.message !== '' && (
-        <p className="notice text-lead" role="alert">
+        <p className="notice notice-blocker" role="alert">
           {autosave.state.message}
         </p>
       )}
       {check.problem !== null && (
-        <p className="notice text-brass" role="status">
+        <p className="notice" role="status">
           The checker could not be asked: {check.problem}
         </p>
       )}

@@ -25,7 +25,7 @@ interface CommentsPanelProps {
   onComment: (anchor: string, text: string) => Promise<void>;
 }
 
-/** Comments by place, in the order they were written, and a form for the next. Ctrl or Cmd with Enter sends it. */
+/** Comments by place, in the order they were written, and a form for the next. */
 export function CommentsPanel({ comments, anchors, canComment, onComment }: CommentsPanelProps) {
   const { register, handleSubmit, reset, setError, formState } = useForm<CommentValues>({
     resolver: zodResolver(commentForm),
@@ -69,13 +69,7 @@ export function CommentsPanel({ comments, anchors, canComment, onComment }: Comm
       )}
       {lost.length > 0 && group('a part that is no longer there', lost)}
       {canComment && (
-        <form
-          className="grid gap-2"
-          onSubmit={(event) => void submit(event)}
-          onKeyDown={(event) => {
-            if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) void submit();
-          }}
-        >
+        <form className="grid gap-2" onSubmit={(event) => void submit(event)}>
           <label>
             <span className="field-label">About</span>
             <select className="field" {...register('anchor')}>

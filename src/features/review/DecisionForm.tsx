@@ -64,13 +64,7 @@ export function DecisionForm({ review, onDecide }: DecisionFormProps) {
   const { errors } = formState;
   const problem = errors.root?.message ?? errors.decision?.message;
   return (
-    <form
-      className="grid gap-4"
-      onSubmit={(event) => void submit(event)}
-      onKeyDown={(event) => {
-        if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) void submit();
-      }}
-    >
+    <form className="grid gap-4" onSubmit={(event) => void submit(event)}>
       {cautions.length > 0 && (
         <fieldset className="grid gap-3">
           <legend className="font-semibold">Cautions that may stand</legend>

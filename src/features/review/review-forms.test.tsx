@@ -136,7 +136,7 @@ describe('the decision', () => {
     await user.type(screen.getByLabelText(/wider than it needs/), 'Fine at this level.');
     expect(approve.disabled).toBe(false);
     await user.click(approve);
-    await user.keyboard('{Control>}{Enter}{/Control}');
+    await user.click(screen.getByRole('button', { name: 'Approve' }));
     expect(decide).toHaveBeenCalledWith({
       decision: 'approved',
       reason: '',
@@ -172,7 +172,7 @@ describe('comments', () => {
     render(<CommentsPanel comments={[]} anchors={anchors} canComment onComment={comment} />);
     await user.selectOptions(screen.getByLabelText('About'), 'p');
     await user.type(screen.getByLabelText('Comment'), 'Which end of the gap?');
-    await user.keyboard('{Control>}{Enter}{/Control}');
+    await user.click(screen.getByRole('button', { name: 'Add comment' }));
     expect(comment).toHaveBeenCalledWith('p', 'Which end of the gap?');
     expect(screen.getByLabelText<HTMLTextAreaElement>('Comment').value).toBe('');
     expect(screen.getByLabelText<HTMLSelectElement>('About').value).toBe('p');

@@ -104,11 +104,11 @@ export function ConflictView({ mine, theirs, base, onMerge }: ConflictViewProps)
           <fieldset key={difference.key} className="border-t border-rule pt-3">
             <legend className="font-semibold">{difference.label}</legend>
             <div className="grid gap-4 sm:grid-cols-2">
-              <div className={choice === 'theirs' ? 'opacity-60' : undefined}>
+              <div className={choice === 'theirs' ? 'text-muted' : undefined}>
                 {option('mine', 'Mine')}
                 {side(difference, 'mine')}
               </div>
-              <div className={choice === 'mine' ? 'opacity-60' : undefined}>
+              <div className={choice === 'mine' ? 'text-muted' : undefined}>
                 {option('theirs', 'The other')}
                 {side(difference, 'theirs')}
               </div>

@@ -31,13 +31,7 @@ export function ReasonForm({ explanation, action, onSubmit, onCancel }: ReasonFo
     }
   });
   return (
-    <form
-      className="grid gap-4"
-      onSubmit={(event) => void submit(event)}
-      onKeyDown={(event) => {
-        if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) void submit();
-      }}
-    >
+    <form className="grid gap-4" onSubmit={(event) => void submit(event)}>
       <p>{explanation}</p>
       <label>
         <span className="field-label">Reason</span>

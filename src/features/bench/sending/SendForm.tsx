@@ -45,13 +45,7 @@ export function SendForm({ reviewers, onSend, onCancel }: SendFormProps) {
     }
   });
   return (
-    <form
-      className="grid gap-4"
-      onSubmit={(event) => void submit(event)}
-      onKeyDown={(event) => {
-        if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) void submit();
-      }}
-    >
+    <form className="grid gap-4" onSubmit={(event) => void submit(event)}>
       <label>
         <span className="field-label">Reviewer</span>
         <select className="field w-full" {...register('reviewer')}>

@@ -1,0 +1,39 @@
+import { useQuery } from '@tanstack/react-query';
+import { useEffect } from 'react';
+import { useNavigate, useParams } from 'react-router';
+
+import { Failure, Loading } from '#src/components/ui/states.tsx';
+import { ChangesView } from '#src/features/changes/ChangesView.tsx';
+import { reviewQuery } from '#src/features/review/api.ts';
+import { ReviewDesk } from '#src/features/review/ReviewDesk.tsx';
+import type { ReviewSlots } from '#src/features/review/slots.ts';
+import { ScaleStrip } from '#src/features/scale-strip/ScaleStrip.tsx';
+import { SchemeView } from '#src/features/sheet/SchemeView.tsx';
+import { SheetView } from '#src/features/sheet/SheetView.tsx';
+import { sentenceOf } from '#src/lib/api.ts';
+
+const SLOTS: ReviewSlots = {
+  sheet: (sheet) => <SheetView sheet={sheet} />,
+  scheme: (scheme) => <SchemeView scheme={scheme} />,
+  scale: (request) => <ScaleStrip {...request} />,
+  changes: (before, after) => <ChangesView before={before} after={after} />,
+};
+
+/** One review, from claiming it to the decision. */
+export function ReviewPage() {
+  const navigate = useNavigate();
+  const reviewId = Number(useParams()['reviewId']);
+  const review = useQuery(reviewQuery(reviewId));
+  const title = review.data === undefined ? 'Review' : `Review of ${review.data.itemCode}`;
+  useEffect(() => {
+    document.title = `${title} · Graticule`;
+  }, [title]);
+
+  if (review.isPending) return <Loading what="the review" />;
+  if (review.isError) {
+    return <Failure message={sentenceOf(review.error)} onRetry={() => void review.refetch()} />;
+  }
+  return (
+    <ReviewDesk key={reviewId} review={review.data} onReleased={() => void navigate('/desk')} slots={SLOTS} />
+  );
+}
