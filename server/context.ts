@@ -6,6 +6,7 @@ import type { Settings } from './config/settings.ts';
 import { type Database, openDatabase } from './db/client.ts';
 import { createEngine, type Engine } from './workers/engine.ts';
 import { createExporter, type Exporter } from './workers/exporter.ts';
+import { createPictures, type Pictures } from './workers/pictures.ts';
 
 /** Everything that the server's features stand on; made once, handed down. */
 export interface AppContext {
@@ -15,6 +16,8 @@ export interface AppContext {
   engine: Engine;
   /** Writes documents, in a thread of its own. */
   exporter: Exporter;
+  /** Looks at uploaded pictures, in a thread of its own. */
+  pictures: Pictures;
   logger: Logger;
   /** The time now. */
   clock: () => Date;
@@ -38,16 +41,18 @@ export function createContext(settings: Settings, overrides: Partial<AppContext>
   };
   const engine = overrides.engine ?? createEngine({ threads: settings.engineWorkers, report });
   const exporter = overrides.exporter ?? createExporter({ report });
+  const pictures = overrides.pictures ?? createPictures({ report });
   return {
     settings,
     database,
     engine,
     exporter,
+    pictures,
     logger,
     clock: () => new Date(),
     random: () => randomInt(2 ** 32) / 2 ** 32,
     close: async () => {
-      await Promise.all([engine.close(), exporter.close()]);
+      await Promise.all([engine.close(), exporter.close(), pictures.close()]);
       await handle?.close();
     },
     ...overrides,

@@ -16,7 +16,9 @@ function sentence(source: Source, problems: readonly FieldProblem[]): string {
   if (source === 'query') {
     return `The search cannot be understood (${first?.path ?? 'query'}: ${first?.message ?? 'not readable'}).`;
   }
-  if (problems.length === 1 && first !== undefined && first.path !== '') return first.message;
+  // A schema's own words are a sentence; the library's are none.
+  const isSentence = first !== undefined && first.path !== '' && first.message.endsWith('.');
+  if (problems.length === 1 && isSentence) return first.message;
   return 'Some fields are not right. Each is marked with what it needs.';
 }
 

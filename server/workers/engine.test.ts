@@ -138,14 +138,44 @@ describe('marking a reviewer’s working', () => {
     },
   );
 
-  it('says when the unit does not fit', async () => {
-    expect((await mark('2.40e-17 V')).remark).toMatch(/unit/);
+  it.each(['2.40e-17 V', '9.99 V'])(
+    'says that the unit of %s does not fit, whatever the number',
+    async (text) => {
+      const marked = await mark(text);
+      expect(marked).toMatchObject({ agrees: false, comparable: false });
+      expect(marked.remark).toBe('The unit V does not measure what is asked for.');
+    },
+  );
+
+  it('does not tell that a number is right in another unit of the same kind', async () => {
+    expect((await mark('2.40e-17 eV')).remark).toBe('Your working does not agree with the checker.');
   });
 
   it('asks for a readable answer', async () => {
     const marked = await mark('quite a lot');
-    expect(marked).toMatchObject({ agrees: false, verdict: { kind: 'notRead' } });
+    expect(marked).toMatchObject({ agrees: false, comparable: false, verdict: { kind: 'notRead' } });
     expect(marked.remark).toMatch(/could not be read/);
+  });
+});
+
+describe('the usual cautions', () => {
+  const quantities = [{ name: 'Va', unit: 'kV', role: 'acceleratingPd' }];
+  const gun = (script: string, stem = 'A gun.') =>
+    engine.cautions(itemContentSchema.parse({ title: 'Gun', stem, script, quantities }));
+
+  it('come from the greatest value over the draws, and defer to local rules', async () => {
+    // X-rays from beams above about 5 kV: common practice.
+    const cautions = await gun('Va = draw(1 kV, 6 kV, 1 kV)');
+    expect(cautions.some((line) => line.includes('X-rays'))).toBe(true);
+    expect(cautions.at(-1)).toMatch(/competent person’s risk assessment/);
+    const mild = await gun('Va = draw(1 kV, 6 kV, 1 kV)\nrequire(Va < 5 kV)');
+    expect(mild.some((line) => line.includes('X-rays'))).toBe(false);
+    expect(mild.some((line) => line.includes('High-tension'))).toBe(true);
+  });
+
+  it('come from the words alone while the script does not compile', async () => {
+    expect(await gun('Va = ', 'A radioactive source ionises the air.')).toHaveLength(2);
+    expect(await gun('Va = ')).toEqual([]);
   });
 });
 

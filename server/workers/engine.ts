@@ -31,6 +31,8 @@ export interface Engine {
   markWorking: (working: WorkingToMark, options?: TaskOptions) => Promise<MarkedWorking>;
   /** A draw by chance that every `require` keeps, null when there is none; `chance` lies in [0, 1). At most 3 s. */
   chooseDraw: (content: ItemContent, chance: number, options?: TaskOptions) => Promise<ChosenDraw>;
+  /** The usual cautions for an item's apparatus, by its words and its values; at most 3 s. */
+  cautions: (content: ItemContent, options?: TaskOptions) => Promise<string[]>;
   /** Question paper and mark scheme with every item at its draw; at most 20 s. */
   buildPaper: (paper: PaperToBuild, options?: TaskOptions) => Promise<BuiltPaper>;
   close: () => Promise<void>;
@@ -84,6 +86,7 @@ export function createEngine({ threads, report }: EngineOptions): Engine {
       ask(quick, 'viewDraw', { content, draw, figures }, QUICK, options),
     markWorking: (working, options) => ask(quick, 'markWorking', working, QUICK, options),
     chooseDraw: (content, chance, options) => ask(quick, 'chooseDraw', { content, chance }, QUICK, options),
+    cautions: (content, options) => ask(quick, 'cautionsOf', content, QUICK, options),
     close: async () => {
       await Promise.all([thorough.close(), quick.close()]);
     },

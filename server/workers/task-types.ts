@@ -1,3 +1,4 @@
+import type { FIGURE_TYPES } from '#shared/contracts/figures.ts';
 import type { PaperFront } from '#shared/sheet/build-paper.ts';
 import type { StoredFigure } from '#shared/sheet/build-item.ts';
 import type { PaperScheme, PaperSheet } from '#shared/sheet/model.ts';
@@ -28,6 +29,8 @@ export interface WorkingToMark {
 export interface MarkedWorking {
   /** Whether the answer lies in the band. */
   agrees: boolean;
+  /** False when there was nothing to compare: the text could not be read, or its unit measures another thing. */
+  comparable: boolean;
   /** Why, for after the reveal; it may tell the answer. */
   verdict: Verdict;
   /** What the reviewer may be told before the reveal; it never tells the answer. */
@@ -66,3 +69,16 @@ export interface ChosenDraw {
   gridSize: number;
   open: boolean;
 }
+
+/** A picture that may be stored: what it is by its content, cleaned, with its natural size. */
+export interface InspectedPicture {
+  mediaType: (typeof FIGURE_TYPES)[number];
+  bytes: Uint8Array;
+  width: number;
+  height: number;
+}
+
+export type PictureVerdict =
+  | { usable: true; picture: InspectedPicture }
+  /** `reason` is a sentence for the person who chose the file. */
+  | { usable: false; code: 'unsupportedFile' | 'tooLarge'; reason: string };

@@ -30,6 +30,7 @@ function lazyEngine(): Engine {
     markWorking: (...args) => started().markWorking(...args),
     chooseDraw: (...args) => started().chooseDraw(...args),
     buildPaper: (...args) => started().buildPaper(...args),
+    cautions: (...args) => started().cautions(...args),
     close: async () => engine?.close(),
   };
 }

@@ -5,7 +5,7 @@ import type { AppContext } from '../../context.ts';
 import { demand } from '../../http/demand.ts';
 import { type Route, route } from '../../http/route.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
-import { storedFigures } from '../figures/service.ts';
+import { storedFigures } from '../figures/stored-figures.ts';
 import { requireItem, subjectOf } from '../items/service.ts';
 
 async function figuresOf(context: AppContext, actor: SignedIn, itemId: number, content: ItemContent) {

@@ -9,6 +9,7 @@ import { addFigure, figureContent, listFigures } from './service.ts';
 /** A picture is shown by itself with nothing allowed to run or load, whatever it holds. */
 const PICTURE_HEADERS = {
   'content-security-policy': "default-src 'none'; style-src 'unsafe-inline'; sandbox",
+  'x-content-type-options': 'nosniff',
   'cache-control': 'private, max-age=31536000, immutable',
 };
 
@@ -21,9 +22,9 @@ export function figureRoutes(context: AppContext): Route[] {
     route(
       contracts.uploadFigure,
       { can: 'item.edit', uploadBytes: contracts.FIGURE_MAX_BYTES },
-      ({ actor, params, file }) => {
+      ({ actor, params, file, signal }) => {
         if (file === null) throw new AppError('badRequest', 'Choose a picture to add.');
-        return addFigure(context, actor, params.itemId, file);
+        return addFigure(context, actor, params.itemId, file, signal);
       },
     ),
     route(contracts.getFigureContent, { can: 'signedIn' }, async ({ actor, params }) => {

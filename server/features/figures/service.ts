@@ -1,18 +1,16 @@
-import { and, desc, eq, inArray } from 'drizzle-orm';
+import { and, desc, eq } from 'drizzle-orm';
 
 import type { Figure } from '#shared/contracts/figures.ts';
-import type { FigureFacts, ItemContent } from '#shared/engine/index.ts';
 import { AppError } from '#shared/errors/app-error.ts';
-import type { StoredFigure } from '#shared/sheet/build-item.ts';
 
-import { sha256 } from '../../db/columns.ts';
 import type { AppContext } from '../../context.ts';
 import { type Connection, inTransaction } from '../../db/client.ts';
-import { figures, items, people, reviews } from '../../db/schema/index.ts';
+import { sha256 } from '../../db/columns.ts';
+import { figures, people } from '../../db/schema/index.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
+import { isReviewerOf, readContent, requireItem, requireRevision, subjectOf } from '../items/service.ts';
 import { recordEvent } from '../records/record-event.ts';
-import { inspectPicture } from './inspect-picture.ts';
 
 const columns = {
   id: figures.id,
@@ -41,54 +39,49 @@ function present(row: Awaited<ReturnType<typeof selectFigures>>[number]): Figure
   return { ...figure, addedBy: { id: addedById, name: addedByName }, createdAt: createdAt.toISOString() };
 }
 
-async function ownerOf(
-  connection: Connection,
-  itemId: number,
-  lock = false,
-): Promise<{ ownerId: number; code: string }> {
-  const select = connection
-    .select({ ownerId: items.ownerId, code: items.code })
-    .from(items)
-    .where(eq(items.id, itemId));
-  const [item] = await (lock ? select.for('update') : select);
-  if (item === undefined) throw new AppError('notFound', 'There is no such item in the bank.');
-  return item;
-}
-
 /** Every picture that was ever added to the item, the newest first. */
 export async function listFigures(context: AppContext, actor: SignedIn, itemId: number) {
-  const item = await ownerOf(context.database, itemId);
-  demand(actor, 'item.read', { ownerId: item.ownerId });
+  const item = await requireItem(context.database, itemId);
+  demand(actor, 'item.read', await subjectOf(context.database, item, actor.id));
   return { figures: (await selectFigures(context.database, itemId)).map(present) };
 }
 
-/** Stores a picture with the item; the same picture twice is one. Throws unsupportedFile or tooLarge. */
+/**
+ * Stores a picture with the item; the same picture twice is one, and none is ever removed. Throws AppError
+ * unsupportedFile or tooLarge, and then nothing is stored.
+ */
 export async function addFigure(
   context: AppContext,
   actor: SignedIn,
   itemId: number,
-  file: { name: string; bytes: Buffer },
+  file: { name: string; bytes: Uint8Array },
+  signal?: AbortSignal,
 ): Promise<Figure> {
-  const owner = await ownerOf(context.database, itemId);
-  demand(actor, 'item.edit', { ownerId: owner.ownerId });
-  const picture = inspectPicture(file.bytes);
-  const hash = sha256(picture.bytes);
+  const before = await requireItem(context.database, itemId);
+  demand(actor, 'item.edit', await subjectOf(context.database, before, actor.id));
+  const verdict = await context.pictures.inspect(file.bytes, signal === undefined ? {} : { signal });
+  if (!verdict.usable) throw new AppError(verdict.code, verdict.reason);
+  const { picture } = verdict;
+  const content = Buffer.from(picture.bytes);
+  const hash = sha256(content);
   return inTransaction(context.database, async (tx) => {
-    const item = await ownerOf(tx, itemId, true);
-    demand(actor, 'item.edit', { ownerId: item.ownerId });
+    const item = await requireItem(tx, itemId, true);
+    demand(actor, 'item.edit', await subjectOf(tx, item, actor.id));
     const [known] = await selectFigures(tx, itemId, hash);
     if (known !== undefined) return present(known);
     await tx.insert(figures).values({
       itemId,
       sha256: hash,
       mediaType: picture.mediaType,
-      content: picture.bytes,
-      byteLength: picture.bytes.length,
+      content,
+      byteLength: content.length,
       width: picture.width,
       height: picture.height,
       originalName: file.name.slice(0, 255),
       addedById: actor.id,
     });
+    const [stored] = await selectFigures(tx, itemId, hash);
+    if (stored === undefined) throw new Error('The figure is gone within its transaction.');
     await recordEvent(tx, {
       event: 'figure.added',
       actor,
@@ -97,60 +90,45 @@ export async function addFigure(
       summary: `Added a figure to ${item.code}.`,
       after: { sha256: hash, mediaType: picture.mediaType },
     });
-    const [stored] = await selectFigures(tx, itemId, hash);
-    if (stored === undefined) throw new Error('The figure is gone within its transaction.');
     return present(stored);
   });
 }
 
-/** The picture itself. People who review the item may see it, as its candidates do. */
+/**
+ * Lets a person see a picture who may open its item, or who reviews it and finds it on the sheet. An SVG before
+ * its holes are filled names quantities of the script, so that the reviewer gets it only within the sheet.
+ */
+async function demandSight(
+  context: AppContext,
+  actor: SignedIn,
+  figure: { id: number; itemId: number; mediaType: string },
+): Promise<void> {
+  const item = await requireItem(context.database, figure.itemId);
+  const subject = await subjectOf(context.database, item, actor.id);
+  const isReviewer = await isReviewerOf(context.database, item.latestRevisionId, actor.id);
+  if (isReviewer && figure.mediaType !== 'image/svg+xml') {
+    const { figures: shown } = readContent(await requireRevision(context.database, item.latestRevisionId));
+    if (shown.some((one) => one.figureId === figure.id)) return;
+  }
+  demand(actor, 'item.read', subject);
+}
+
+/** The picture itself. */
 export async function figureContent(
   context: AppContext,
   actor: SignedIn,
   figureId: number,
 ): Promise<{ bytes: Buffer; mediaType: string }> {
   const [figure] = await context.database
-    .select({ content: figures.content, mediaType: figures.mediaType, itemId: figures.itemId })
+    .select({
+      id: figures.id,
+      content: figures.content,
+      mediaType: figures.mediaType,
+      itemId: figures.itemId,
+    })
     .from(figures)
     .where(eq(figures.id, figureId));
   if (figure === undefined) throw new AppError('notFound', 'There is no such figure.');
-  const [mine] = await context.database
-    .select({ id: reviews.id })
-    .from(reviews)
-    .where(and(eq(reviews.itemId, figure.itemId), eq(reviews.reviewerId, actor.id)))
-    .limit(1);
-  if (mine === undefined) demand(actor, 'item.read');
+  await demandSight(context, actor, figure);
   return { bytes: figure.content, mediaType: figure.mediaType };
-}
-
-/** The pictures that a content shows, as the sheet needs them. */
-export async function storedFigures(connection: Connection, content: ItemContent): Promise<StoredFigure[]> {
-  const ids = content.figures.map((figure) => figure.figureId);
-  if (ids.length === 0) return [];
-  const rows = await connection.select().from(figures).where(inArray(figures.id, ids));
-  return rows.map((row) => ({
-    figureId: row.id,
-    mediaType: row.mediaType,
-    svg: row.mediaType === 'image/svg+xml' ? row.content.toString('utf8') : null,
-    width: row.width,
-    height: row.height,
-  }));
-}
-
-/** What the assay is told of them. */
-export async function figureFacts(connection: Connection, content: ItemContent): Promise<FigureFacts[]> {
-  return (await storedFigures(connection, content)).map(({ figureId, svg }) => ({ figureId, svg }));
-}
-
-/** Bytes of bitmaps, by id, for the exports. */
-export async function figureBytes(
-  connection: Connection,
-  ids: readonly number[],
-): Promise<Map<number, { bytes: Uint8Array; mediaType: string }>> {
-  if (ids.length === 0) return new Map();
-  const rows = await connection
-    .select({ id: figures.id, content: figures.content, mediaType: figures.mediaType })
-    .from(figures)
-    .where(inArray(figures.id, [...ids]));
-  return new Map(rows.map((row) => [row.id, { bytes: row.content, mediaType: row.mediaType }]));
 }

@@ -7,12 +7,21 @@ import type { AppContext } from '../../context.ts';
 import { inTransaction, type Transaction } from '../../db/client.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
+import { tellingCurrent } from '../../http/telling-current.ts';
 import { queueMail } from '../../jobs/queue-mail.ts';
 import { personById } from '../people/service.ts';
 import { recordEvent } from '../records/record-event.ts';
 import { isFresh } from './present.ts';
 import * as queries from './queries.ts';
-import { loadItem, readContent, requireItem, requireRevision, runAssay, subjectOf } from './service.ts';
+import {
+  demandVersion,
+  getItem,
+  readContent,
+  requireItem,
+  requireRevision,
+  runAssay,
+  subjectOf,
+} from './service.ts';
 
 /** Asks the item's life for the next state; throws AppError notPossible with the reason why not. */
 export function nextState(state: Parameters<typeof itemTransition>[0], action: ItemAction) {
@@ -23,7 +32,7 @@ export function nextState(state: Parameters<typeof itemTransition>[0], action: I
 
 /** Begins a new revision with a copy of the latest content. */
 export async function startRevision(context: AppContext, actor: SignedIn, itemId: number): Promise<Item> {
-  return inTransaction(context.database, async (tx) => {
+  await inTransaction(context.database, async (tx) => {
     const item = await requireItem(tx, itemId, true);
     demand(actor, 'item.edit', await subjectOf(tx, item, actor.id));
     const revision = await requireRevision(tx, item.latestRevisionId);
@@ -44,8 +53,8 @@ export async function startRevision(context: AppContext, actor: SignedIn, itemId
         summary: `Began revision ${revision.number + 1} of ${item.code}.`,
       });
     }
-    return loadItem(tx, actor, itemId);
   });
+  return getItem(context, actor, itemId);
 }
 
 /** Assays the latest revision unless that was done and nothing has moved since; keeps the result. */
@@ -98,6 +107,23 @@ async function requireReviewer(
   return reviewer;
 }
 
+/** Refuses what cannot be sent before an assay is run for it. */
+async function demandSendable(
+  context: AppContext,
+  actor: SignedIn,
+  itemId: number,
+  version: number,
+): Promise<void> {
+  const item = await requireItem(context.database, itemId);
+  demand(actor, 'item.send', await subjectOf(context.database, item, actor.id));
+  const revision = await requireRevision(context.database, item.latestRevisionId);
+  nextState(revision.state, { kind: 'send', assayFresh: true, blockers: 0 });
+  await tellingCurrent(
+    async () => demandVersion(revision, version),
+    () => getItem(context, actor, itemId),
+  );
+}
+
 /**
  * Sends the draft to a reviewer or to the queue. The assay is run first when it is stale; a blocker refuses.
  * Throws AppError conflict for a stale version.
@@ -108,25 +134,12 @@ export async function sendToReview(
   itemId: number,
   sending: Sending,
 ): Promise<Item> {
-  const before = await requireItem(context.database, itemId);
-  demand(actor, 'item.send', await subjectOf(context.database, before, actor.id));
-  await freshAssay(context, actor, itemId);
-  const revisionBefore = await requireRevision(context.database, before.latestRevisionId);
-  const chosen = await context.engine.chooseDraw(readContent(revisionBefore), context.random());
-  return inTransaction(context.database, async (tx) => {
+  const send = async (tx: Transaction) => {
     const item = await requireItem(tx, itemId, true);
     const subject = await subjectOf(tx, item, actor.id);
     demand(actor, 'item.send', subject);
     const revision = await requireRevision(tx, item.latestRevisionId);
-    if (revision.version !== sending.version || revision.contentHash !== revisionBefore.contentHash) {
-      throw new AppError(
-        'conflict',
-        'This draft was changed elsewhere since you opened it. Look at it again.',
-        {
-          current: await loadItem(tx, actor, itemId),
-        },
-      );
-    }
+    demandVersion(revision, sending.version);
     const assay = await queries.selectNewestAssay(tx, revision.id);
     const { state, event } = nextState(revision.state, {
       kind: 'send',
@@ -142,7 +155,6 @@ export async function sendToReview(
       revisionId: revision.id,
       requestedById: actor.id,
       reviewerId: sending.reviewerId,
-      draw: chosen.draw ?? 1,
       note: sending.note,
       dueOn: sending.dueOn,
     });
@@ -161,8 +173,14 @@ export async function sendToReview(
       subjectId: itemId,
       summary: `Sent ${item.code} revision ${revision.number} to ${reviewer?.name ?? 'the review queue'}.`,
     });
-    return loadItem(tx, actor, itemId);
-  });
+  };
+  await demandSendable(context, actor, itemId, sending.version);
+  await freshAssay(context, actor, itemId);
+  await tellingCurrent(
+    () => inTransaction(context.database, send),
+    () => getItem(context, actor, itemId),
+  );
+  return getItem(context, actor, itemId);
 }
 
 /** Takes the item back from review; its review ends without a decision on the merits. */
@@ -172,7 +190,7 @@ export async function recallItem(
   itemId: number,
   reason: string,
 ): Promise<Item> {
-  return inTransaction(context.database, async (tx) => {
+  await inTransaction(context.database, async (tx) => {
     const item = await requireItem(tx, itemId, true);
     demand(actor, 'item.recall', await subjectOf(tx, item, actor.id));
     const revision = await requireRevision(tx, item.latestRevisionId);
@@ -188,8 +206,8 @@ export async function recallItem(
       summary: `Took ${item.code} revision ${revision.number} back from review.`,
       after: { reason },
     });
-    return loadItem(tx, actor, itemId);
   });
+  return getItem(context, actor, itemId);
 }
 
 /** Withdraws the item: no new paper can take it. Papers that hold a revision keep it. */
@@ -199,7 +217,7 @@ export async function withdrawItem(
   itemId: number,
   reason: string,
 ): Promise<Item> {
-  return inTransaction(context.database, async (tx) => {
+  await inTransaction(context.database, async (tx) => {
     const item = await requireItem(tx, itemId, true);
     demand(actor, 'item.withdraw', await subjectOf(tx, item, actor.id));
     const revision = await requireRevision(tx, item.latestRevisionId);
@@ -219,6 +237,6 @@ export async function withdrawItem(
       summary: `Withdrew ${item.code}.`,
       after: { reason },
     });
-    return loadItem(tx, actor, itemId);
   });
+  return getItem(context, actor, itemId);
 }

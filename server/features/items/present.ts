@@ -3,7 +3,6 @@ import type { z } from 'zod';
 import type { Item, ItemRow, revisionSummarySchema, StoredAssay } from '#shared/contracts/items.ts';
 import { abilitiesFor, type Action, type Actor, type Subject } from '#shared/domain/permissions.ts';
 import { ENGINE_VERSION, type ItemContent } from '#shared/engine/index.ts';
-import { cautionsFor } from '#shared/sheet/cautions.ts';
 
 import type { assays } from '../../db/schema/index.ts';
 import type { ItemRecord, RevisionRow, selectItemPage } from './queries.ts';
@@ -20,7 +19,10 @@ const ITEM_ACTIONS: readonly Action[] = [
 type PageRow = Awaited<ReturnType<typeof selectItemPage>>['rows'][number];
 type AssayRow = typeof assays.$inferSelect;
 
-/** A row of the bank; where the item is used is told only to those who may see papers. */
+/**
+ * A row of the bank. Where the item is used is told only to those who may see papers, findings not to those who
+ * are to work the item independently.
+ */
 export function presentRow(row: PageRow, maySeePapers: boolean): ItemRow {
   const fresh = row.assayHash === row.contentHash && row.assayEngine === ENGINE_VERSION;
   return {
@@ -34,7 +36,7 @@ export function presentRow(row: PageRow, maySeePapers: boolean): ItemRow {
     parts: row.parts,
     revision: row.revision,
     approvedRevision: row.approvedRevision,
-    worstFinding: row.worstFinding,
+    worstFinding: row.findingsHidden ? null : row.worstFinding,
     assayed: row.assayHash === null ? 'never' : fresh ? 'fresh' : 'stale',
     usedOn: maySeePapers ? row.usedOn : null,
     updatedAt: row.updatedAt.toISOString(),
@@ -74,7 +76,9 @@ interface WholeItem {
   content: ItemContent;
   approved: RevisionRow | null;
   assay: AssayRow | null;
-  review: { id: number; decision: string | null; decisionReason: string } | null;
+  review: { id: number } | null;
+  returnReason: string | null;
+  cautions: string[];
   actor: Actor;
   subject: Subject;
 }
@@ -87,6 +91,8 @@ export function presentItem({
   approved,
   assay,
   review,
+  returnReason,
+  cautions,
   actor,
   subject,
 }: WholeItem): Item {
@@ -99,10 +105,10 @@ export function presentItem({
     revision: { ...presentRevision(revision), content, version: revision.version },
     approvedRevision: approved === null ? null : presentRevision(approved),
     reviewId: review?.id ?? null,
-    returnedBecause:
-      revision.state === 'returned' && review?.decision !== null ? (review?.decisionReason ?? null) : null,
+    // The reasons stay in sight while the next revision answers them.
+    returnedBecause: ['returned', 'drafting'].includes(revision.state) ? returnReason : null,
     assay: assay === null ? null : presentAssay(assay, revision.contentHash),
-    cautions: cautionsFor(content, null, null),
+    cautions,
     abilities: abilitiesFor(actor, ITEM_ACTIONS, subject),
   };
 }

@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, isNotNull, isNull, like, ne, or, type SQL, sql } from 'drizzle-orm';
+import { and, asc, count, desc, eq, isNotNull, isNull, like, ne, not, or, type SQL, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/mysql-core';
 
 import type { ItemQuery } from '#shared/contracts/items.ts';
@@ -21,33 +21,57 @@ const latest = alias(revisions, 'latest');
 const approved = alias(revisions, 'approved');
 const assay = alias(assays, 'assay');
 
-const MEANS_NOTHING_ALONE = /[+\-<>()~*"@]/g;
-
-/** Every word must begin some word of the item, or the text must begin its code. */
-function searchCondition(search: string): SQL | undefined {
-  const words = search
-    .replace(MEANS_NOTHING_ALONE, ' ')
-    .split(/\s+/)
-    .filter((word) => word.length >= 3);
-  const byCode = like(items.code, `${search.replace(/[%_\\]/g, '\\$&')}%`);
-  const byTitle = like(items.title, `%${search.replace(/[%_\\]/g, '\\$&')}%`);
-  if (words.length === 0) return or(byCode, byTitle);
-  const wanted = words.map((word) => `+${word}*`).join(' ');
-  const byText = sql`match(${items.searchText}) against (${wanted} in boolean mode)`;
-  return or(byCode, byTitle, byText);
+/** Who looks at the list, as far as it decides what they may find out. */
+export interface Viewer {
+  id: number;
+  /** Whether their roles let them open items at all. */
+  opensItems: boolean;
 }
 
-function conditions(query: ItemQuery): SQL | undefined {
+/** Words that the full-text index leaves out (InnoDB's default list) or that are too short for it. */
+const UNINDEXED = new Set(
+  'about are com for from how that the this was what when where who will with und www'.split(' '),
+);
+const SHORTEST_WORD = 3;
+
+/** The code or title holds the search, or every indexed word of it begins some word of the item's printed text. */
+function searchCondition(search: string): SQL | undefined {
+  const pattern = search.replace(/[%_\\]/g, '\\$&');
+  const byName = or(like(items.code, `${pattern}%`), like(items.title, `%${pattern}%`));
+  const looksLikeCode = /^[A-Za-z]{2,3}-\d*$/.test(search);
+  const words = search
+    .toLowerCase()
+    .split(/[^\p{L}\p{N}]+/u)
+    .filter((word) => word.length >= SHORTEST_WORD && !UNINDEXED.has(word));
+  if (looksLikeCode || words.length === 0) return byName;
+  const wanted = words.map((word) => `+${word}*`).join(' ');
+  // The index covers these three columns together, so all three are named.
+  const byText = sql`match(${items.code}, ${items.title}, ${items.searchText}) against (${wanted} in boolean mode)`;
+  return or(byName, byText);
+}
+
+/** True for items whose findings would tell this person something before their own working of the item. */
+function findingsHidden({ id, opensItems }: Viewer): SQL<number> {
+  const awaited = opensItems
+    ? sql`${reviews.reviewerId} = ${id}`
+    : sql`(${reviews.reviewerId} = ${id} or ${reviews.reviewerId} is null)`;
+  return sql<number>`exists (select 1 from ${reviews} where ${reviews.itemId} = ${items.id} and ${reviews.stage} in ('waiting', 'working') and ${awaited})`;
+}
+
+function conditions(query: ItemQuery, viewer: Viewer): SQL | undefined {
+  const byFinding =
+    query.finding === undefined
+      ? undefined
+      : query.finding === 'none'
+        ? and(isNull(items.worstFinding), isNotNull(items.latestAssayId))
+        : eq(items.worstFinding, query.finding);
   return and(
     query.search === undefined || query.search === '' ? undefined : searchCondition(query.search),
     query.topic === undefined ? undefined : eq(items.topicId, query.topic),
     query.state === undefined ? undefined : eq(items.state, query.state),
     query.owner === undefined ? undefined : eq(items.ownerId, query.owner),
-    query.finding === undefined
-      ? undefined
-      : query.finding === 'none'
-        ? and(isNull(items.worstFinding), isNotNull(items.latestAssayId))
-        : eq(items.worstFinding, query.finding),
+    byFinding,
+    byFinding === undefined ? undefined : not(findingsHidden(viewer)),
   );
 }
 
@@ -61,9 +85,9 @@ const SORT_COLUMNS = {
   updated: items.updatedAt,
 } as const;
 
-/** One page of the bank. `usedOn` counts the papers that hold the item. */
-export async function selectItemPage(connection: Connection, query: ItemQuery) {
-  const where = conditions(query);
+/** One page of the bank as `viewer` may see it. `usedOn` counts the papers that hold the item. */
+export async function selectItemPage(connection: Connection, query: ItemQuery, viewer: Viewer) {
+  const where = conditions(query, viewer);
   const direction = query.direction === 'ascending' ? asc : desc;
   const rows = await connection
     .select({
@@ -74,6 +98,7 @@ export async function selectItemPage(connection: Connection, query: ItemQuery) {
       marks: items.marks,
       parts: items.partsCount,
       worstFinding: items.worstFinding,
+      findingsHidden: findingsHidden(viewer).mapWith(Boolean),
       updatedAt: items.updatedAt,
       topicId: topics.id,
       topicCode: topics.code,
@@ -211,10 +236,34 @@ export async function isWorkingBlind(
   return row !== undefined;
 }
 
+/** Whether a review of this revision is addressed to, or was taken on by, this person. */
+export async function isReviewerOf(
+  connection: Connection,
+  revisionId: number,
+  personId: number,
+): Promise<boolean> {
+  const [row] = await connection
+    .select({ id: reviews.id })
+    .from(reviews)
+    .where(and(eq(reviews.revisionId, revisionId), eq(reviews.reviewerId, personId)));
+  return row !== undefined;
+}
+
 /** The review of a revision, or null. */
 export async function selectReviewOf(connection: Connection, revisionId: number) {
   const [row] = await connection.select().from(reviews).where(eq(reviews.revisionId, revisionId));
   return row ?? null;
+}
+
+/** The reasons of the item's newest decided review when that returned it, or null. */
+export async function selectReturnReason(connection: Connection, itemId: number): Promise<string | null> {
+  const [row] = await connection
+    .select({ decision: reviews.decision, reason: reviews.decisionReason })
+    .from(reviews)
+    .where(and(eq(reviews.itemId, itemId), eq(reviews.stage, 'decided')))
+    .orderBy(desc(reviews.decidedAt), desc(reviews.id))
+    .limit(1);
+  return row?.decision === 'returned' ? row.reason : null;
 }
 
 interface NewItem {
@@ -387,12 +436,15 @@ export async function insertReview(
     revisionId: number;
     requestedById: number;
     reviewerId: number | null;
-    draw: number;
     note: string;
     dueOn: string | null;
   },
 ): Promise<number> {
-  const [stored] = await tx.insert(reviews).values(review).$returningId();
+  // The draw is chosen when the review is claimed.
+  const [stored] = await tx
+    .insert(reviews)
+    .values({ ...review, draw: 1 })
+    .$returningId();
   if (stored === undefined) throw new Error('The review was not stored.');
   return stored.id;
 }

@@ -1,34 +1,27 @@
 import type { Item, ItemQuery, StoredAssay } from '#shared/contracts/items.ts';
+import { itemTransition } from '#shared/domain/item-life.ts';
 import { permit, type Subject } from '#shared/domain/permissions.ts';
 import { assayedHash, type ItemContent, itemContentSchema, worstSeverity } from '#shared/engine/index.ts';
-import { AppError } from '#shared/errors/app-error.ts';
+import { AppError, type FieldProblem } from '#shared/errors/app-error.ts';
+import { cautionsFor } from '#shared/sheet/cautions.ts';
 
 import type { AppContext } from '../../context.ts';
-import { type Connection, inTransaction } from '../../db/client.ts';
+import { type Connection, inTransaction, type Transaction } from '../../db/client.ts';
 import { takeNumber } from '../../db/take-number.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
-import { figureFacts } from '../figures/service.ts';
+import { tellingCurrent } from '../../http/telling-current.ts';
+import { figureFacts, foreignFigures } from '../figures/stored-figures.ts';
 import { recordEvent } from '../records/record-event.ts';
 import { topicById } from '../topics/service.ts';
 import { presentAssay, presentItem, presentRevision, presentRow } from './present.ts';
 import * as queries from './queries.ts';
-
-/** Every text of the item that a search looks through. */
-export function searchText(code: string, content: ItemContent): string {
-  return [
-    code,
-    content.title,
-    content.stem,
-    ...content.parts.flatMap((part) => [part.text, ...part.scheme.map((line) => line.text)]),
-    content.script,
-  ].join('\n');
-}
+import { searchText } from './search-text.ts';
 
 /** What ownership rules ask about an item. */
 export async function subjectOf(
   connection: Connection,
-  item: queries.ItemRecord,
+  item: Pick<queries.ItemRecord, 'id' | 'ownerId'>,
   actorId: number,
 ): Promise<Subject> {
   return {
@@ -60,11 +53,12 @@ export async function requireRevision(
 }
 
 /** Stored content in today's form. */
-export function readContent(revision: queries.RevisionRow): ItemContent {
+export function readContent(revision: Pick<queries.RevisionRow, 'content'>): ItemContent {
   return itemContentSchema.parse(revision.content);
 }
 
 export const authorIdsOf = queries.selectAuthorIds;
+export const isReviewerOf = queries.isReviewerOf;
 
 /** The newest assay of a revision with whether it is stale; null when there is none. */
 export async function newestAssayOf(connection: Connection, revisionId: number): Promise<StoredAssay | null> {
@@ -87,7 +81,8 @@ export async function previousApproved(
 }
 
 export async function listItems(context: AppContext, actor: SignedIn, query: ItemQuery) {
-  const { rows, total } = await queries.selectItemPage(context.database, query);
+  const viewer = { id: actor.id, opensItems: permit(actor, 'item.read').allowed };
+  const { rows, total } = await queries.selectItemPage(context.database, query, viewer);
   const maySeePapers = permit(actor, 'paper.list').allowed;
   return {
     rows: rows.map((row) => presentRow(row, maySeePapers)),
@@ -97,32 +92,42 @@ export async function listItems(context: AppContext, actor: SignedIn, query: Ite
   };
 }
 
+/** Cautions by words and values; by words alone while the engine cannot answer. */
+async function cautionsOf(context: AppContext, content: ItemContent): Promise<string[]> {
+  try {
+    return await context.engine.cautions(content);
+  } catch (error) {
+    if (error instanceof AppError) return cautionsFor(content, null, null);
+    throw error;
+  }
+}
+
 /** The whole item as this person may see it. */
-export async function loadItem(connection: Connection, actor: SignedIn, itemId: number): Promise<Item> {
-  const item = await requireItem(connection, itemId);
-  const subject = await subjectOf(connection, item, actor.id);
+export async function getItem(context: AppContext, actor: SignedIn, itemId: number): Promise<Item> {
+  const { database } = context;
+  const item = await requireItem(database, itemId);
+  const subject = await subjectOf(database, item, actor.id);
   demand(actor, 'item.read', subject);
-  const revision = await requireRevision(connection, item.latestRevisionId);
-  const approved =
-    item.approvedRevisionId === null
-      ? null
-      : await queries.selectRevision(connection, item.approvedRevisionId);
+  const revision = await requireRevision(database, item.latestRevisionId);
+  const content = readContent(revision);
   return presentItem({
     item,
     revision,
-    content: readContent(revision),
-    approved,
-    assay: await queries.selectNewestAssay(connection, revision.id),
-    review: await queries.selectReviewOf(connection, revision.id),
+    content,
+    approved:
+      item.approvedRevisionId === null
+        ? null
+        : await queries.selectRevision(database, item.approvedRevisionId),
+    assay: await queries.selectNewestAssay(database, revision.id),
+    review: await queries.selectReviewOf(database, revision.id),
+    returnReason: await queries.selectReturnReason(database, itemId),
+    cautions: await cautionsOf(context, content),
     actor,
     subject,
   });
 }
 
-export const getItem = (context: AppContext, actor: SignedIn, itemId: number): Promise<Item> =>
-  loadItem(context.database, actor, itemId);
-
-/** Stores a new item with an empty first revision. */
+/** Stores a new item with an empty first revision, coded by its topic and the next number. */
 export async function createItem(
   context: AppContext,
   actor: SignedIn,
@@ -155,9 +160,41 @@ export async function createItem(
   });
 }
 
+/** Insists that the draft is the one that the person looked at; throws AppError conflict. */
+export function demandVersion(revision: queries.RevisionRow, version: number): void {
+  if (revision.version !== version) {
+    throw new AppError(
+      'conflict',
+      'This draft was changed elsewhere since you opened it. Compare the two; nothing of either is lost.',
+    );
+  }
+}
+
+/** What no schema can see of a content by itself. Throws AppError invalid with the fields' problems. */
+async function demandSoundContent(tx: Transaction, itemId: number, content: ItemContent): Promise<void> {
+  const ids = content.parts.map((part) => part.id);
+  const problems: FieldProblem[] = ids.flatMap((id, index) =>
+    ids.indexOf(id) === index
+      ? []
+      : [{ path: `content.parts.${index}.id`, message: 'Another part has this id already.' }],
+  );
+  const foreign = await foreignFigures(tx, itemId, content);
+  content.figures.forEach(({ figureId }, index) => {
+    if (!foreign.has(figureId)) return;
+    problems.push({
+      path: `content.figures.${index}.figureId`,
+      message: 'This figure does not belong to the item. Add the picture to this item first.',
+    });
+  });
+  if (problems.length > 0) {
+    throw new AppError('invalid', problems[0]?.message ?? '', { fields: problems });
+  }
+}
+
 /**
- * Saves the draft. Throws AppError conflict (with the item as stored) when the version is stale, and
- * notPossible when the item is not being drafted; nothing is changed then.
+ * Saves the draft. Throws AppError conflict (with the item as stored) when the version is stale, notPossible
+ * when the item is not being drafted, and invalid for parts that share an id or figures of another item;
+ * nothing is changed then.
  */
 export async function saveDraft(
   context: AppContext,
@@ -165,22 +202,20 @@ export async function saveDraft(
   itemId: number,
   wanted: { version: number; content: ItemContent; topicId?: number | undefined },
 ): Promise<{ version: number; savedAt: string }> {
-  return inTransaction(context.database, async (tx) => {
+  const save = async (tx: Transaction) => {
     const item = await requireItem(tx, itemId, true);
     demand(actor, 'item.edit', await subjectOf(tx, item, actor.id));
     const revision = await requireRevision(tx, item.latestRevisionId);
-    if (revision.version !== wanted.version) {
+    demandVersion(revision, wanted.version);
+    const transition = itemTransition(revision.state, { kind: 'edit' });
+    if (!transition.possible) throw new AppError('notPossible', transition.reason);
+    if (transition.newRevision) {
       throw new AppError(
-        'conflict',
-        'This draft was changed elsewhere since you opened it. Compare the two.',
-        {
-          current: await loadItem(tx, actor, itemId),
-        },
+        'notPossible',
+        'This revision can no longer be edited. Start a new one; papers keep the revision that they took.',
       );
     }
-    if (revision.state !== 'drafting') {
-      throw new AppError('notPossible', 'This revision can no longer be edited. Start a new one.');
-    }
+    await demandSoundContent(tx, itemId, wanted.content);
     const topicId = wanted.topicId === undefined ? item.topicId : (await topicById(tx, wanted.topicId)).id;
     const at = context.clock();
     await queries.updateDraft(tx, {
@@ -195,7 +230,11 @@ export async function saveDraft(
       at,
     });
     return { version: revision.version + 1, savedAt: at.toISOString() };
-  });
+  };
+  return tellingCurrent(
+    () => inTransaction(context.database, save),
+    () => getItem(context, actor, itemId),
+  );
 }
 
 export async function listRevisions(context: AppContext, actor: SignedIn, itemId: number) {
@@ -220,17 +259,17 @@ export async function getRevision(context: AppContext, actor: SignedIn, itemId: 
 }
 
 /** Assays the content of a revision in the pool, outside any transaction. */
-export async function runAssay(context: AppContext, content: ItemContent, signal?: AbortSignal) {
+export async function runAssay(context: AppContext, content: ItemContent) {
   const figures = await figureFacts(context.database, content);
   const started = performance.now();
-  const report = await context.engine.assay(content, {
-    figures,
-    ...(signal === undefined ? {} : { signal }),
-  });
+  const report = await context.engine.assay(content, { figures });
   return { report, durationMs: Math.round((performance.now() - started) * 10) / 10 };
 }
 
-/** Runs the full assay on the latest revision and keeps it. Throws conflict when the draft moved meanwhile. */
+/**
+ * Runs the full assay on the latest revision and keeps it with the content that it was run on; when the draft
+ * has moved meanwhile, the reply says that it is stale.
+ */
 export async function assayLatest(
   context: AppContext,
   actor: SignedIn,
@@ -251,6 +290,9 @@ export async function assayLatest(
       worst: worstSeverity(report.findings),
       at: context.clock(),
     });
+    const stored = await queries.selectNewestAssay(tx, revision.id);
+    if (stored === null) throw new Error('The assay is gone within its transaction.');
+    const now = await requireRevision(tx, revision.id);
     await recordEvent(tx, {
       event: 'item.assayed',
       actor,
@@ -258,9 +300,6 @@ export async function assayLatest(
       subjectId: item.id,
       summary: `Assayed ${item.code} revision ${revision.number}: ${report.findings.length} findings.`,
     });
-    const stored = await queries.selectNewestAssay(tx, revision.id);
-    if (stored === null) throw new Error('The assay is gone within its transaction.');
-    const now = await requireRevision(tx, revision.id);
     return presentAssay(stored, now.contentHash);
   });
 }

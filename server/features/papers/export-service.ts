@@ -8,7 +8,7 @@ import type { Bitmaps } from '../../export/bitmaps.ts';
 import { demand } from '../../http/demand.ts';
 import { FileReply } from '../../http/file-reply.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
-import { figureBytes } from '../figures/service.ts';
+import { bitmapsOf } from '../figures/stored-figures.ts';
 import * as queries from './queries.ts';
 import { openSeal, SHORT_HASH } from './seal.ts';
 import { assemble, recordView, requirePaper } from './service.ts';
@@ -27,7 +27,7 @@ async function printedPaper(context: AppContext, paperId: number): Promise<Print
   if (seal === null) {
     const { places, built } = await assemble(context, context.database, paperId);
     const ids = places.flatMap((place) => place.content.figures.map((figure) => figure.figureId));
-    return { sheet: built.sheet, scheme: built.scheme, bitmaps: await figureBytes(context.database, ids) };
+    return { sheet: built.sheet, scheme: built.scheme, bitmaps: await bitmapsOf(context.database, ids) };
   }
   const { paper, intact } = openSeal(seal.canonical, seal.sha256);
   if (!intact) {

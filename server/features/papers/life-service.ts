@@ -5,7 +5,7 @@ import type { AppContext } from '../../context.ts';
 import { inTransaction } from '../../db/client.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
-import { figureBytes } from '../figures/service.ts';
+import { bitmapsOf } from '../figures/stored-figures.ts';
 import { recordEvent } from '../records/record-event.ts';
 import { nextPaperState } from './next-state.ts';
 import * as queries from './queries.ts';
@@ -64,13 +64,13 @@ export async function returnPaper(
 
 /** Everything that the seal freezes, bitmaps included. */
 async function sealedContent(
-  connection: Parameters<typeof figureBytes>[0],
+  connection: Parameters<typeof bitmapsOf>[0],
   { places, built }: AssembledPaper,
 ): Promise<SealedPaper> {
   const items: SealedPaper['items'] = [];
   for (const place of places) {
     const content = itemContentSchema.parse(place.content);
-    const bytes = await figureBytes(
+    const bytes = await bitmapsOf(
       connection,
       content.figures.map((figure) => figure.figureId),
     );

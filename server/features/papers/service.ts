@@ -7,7 +7,7 @@ import { type Connection, inTransaction, type Transaction } from '../../db/clien
 import { takeNumber } from '../../db/take-number.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
-import { storedFigures } from '../figures/service.ts';
+import { storedFigures } from '../figures/stored-figures.ts';
 import { recordEvent } from '../records/record-event.ts';
 import type { BuiltPaper } from '../../workers/task-types.ts';
 import { nextPaperState } from './next-state.ts';

@@ -8,7 +8,7 @@ import type { AppContext } from '../../context.ts';
 import { type Connection, inTransaction, type Transaction } from '../../db/client.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
-import { storedFigures } from '../figures/service.ts';
+import { storedFigures } from '../figures/stored-figures.ts';
 import {
   authorIdsOf,
   newestAssayOf,

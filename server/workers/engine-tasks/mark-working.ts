@@ -8,6 +8,7 @@ import {
   markResponse,
   type NumericPart,
   readResponse,
+  sameDimension,
   type Verdict,
   type WrongWorking,
 } from '#shared/engine/index.ts';
@@ -38,9 +39,9 @@ function slipValues(script: CompiledScript, part: NumericPart, values: DrawValue
   });
 }
 
-function unmarked(reason: string): MarkedWorking {
+function unmarked(reason: string, comparable: boolean): MarkedWorking {
   const verdict: Verdict = { kind: 'notRead', marks: 0, reason, value: null, relativeError: null };
-  return { agrees: false, verdict, remark: reason };
+  return { agrees: false, comparable, verdict, remark: reason };
 }
 
 /**
@@ -49,15 +50,19 @@ function unmarked(reason: string): MarkedWorking {
  */
 export function markWorking({ content, partId, draw, text }: WorkingToMark): MarkedWorking {
   const part = content.parts.find((candidate) => candidate.id === partId);
-  if (part === undefined || !isNumericPart(part)) return unmarked('This part has no numeric answer.');
+  if (part === undefined || !isNumericPart(part)) return unmarked('This part has no numeric answer.', false);
   const { item } = itemAtDraw(content, draw, []);
   const band =
     item.script === null || item.values === null ? null : answerBand(item.script, part, item.values);
   if (band === null || item.script === null || item.values === null) {
-    return unmarked('The checker has no answer of its own to this part, so it cannot compare.');
+    return unmarked('The checker has no answer of its own to this part, so it cannot compare.', true);
   }
   const reading = readResponse(text);
-  if (!reading.ok) return unmarked(`This answer could not be read: ${reading.reason}`);
+  if (!reading.ok) return unmarked(`This answer could not be read: ${reading.reason}`, false);
+  // Told whatever the number is, so that it says nothing of the answer.
+  if (reading.unit !== null && !sameDimension(reading.unit.dimension, band.unit.dimension)) {
+    return unmarked(`The unit ${reading.unitText} does not measure what is asked for.`, false);
+  }
   const verdict = markResponse(
     {
       value: band.answerSI,
@@ -73,12 +78,14 @@ export function markWorking({ content, partId, draw, text }: WorkingToMark): Mar
     },
     reading,
   );
-  if (verdict.kind === 'accepted') {
-    return { agrees: true, verdict, remark: 'Your working agrees with the checker.' };
-  }
-  const remark =
-    verdict.kind === 'unit'
-      ? 'The unit of your answer does not fit what is asked for.'
-      : 'Your working does not agree with the checker.';
-  return { agrees: false, verdict, remark };
+  const agrees = verdict.kind === 'accepted';
+  return {
+    agrees,
+    comparable: true,
+    verdict,
+    // Nothing more: that only the unit, the sign or a power of ten is wrong would tell the answer.
+    remark: agrees
+      ? 'Your working agrees with the checker.'
+      : 'Your working does not agree with the checker.',
+  };
 }
