@@ -87,11 +87,13 @@ export function assayItem(
   const plan = planDraws(script);
   const context = createAssayContext(content, script, plan, options.figures ?? []);
   const answers = checkAnswers(context);
+  const dependence = checkDependence(context);
+  const variety = checkVariety(context);
   const distributions = createDistributions(context);
   const running: RunningCheck[] = [
-    ...[checkDefined, checkLimits, checkLaws, checkValidity, checkDependence, checkVariety, checkPrint].map(
-      (start) => start(context),
-    ),
+    ...[checkDefined, checkLimits, checkLaws, checkValidity, checkPrint].map((start) => start(context)),
+    dependence,
+    variety,
     answers,
     distributions,
   ];
@@ -118,10 +120,14 @@ export function assayItem(
       exhaustive: plan.exhaustive,
       drawsAssayed: plan.count,
       drawsDiscarded: discarded,
-      coverage: coverageStatement(plan, failing),
+      coverage: coverageStatement(plan, failing) + answers.coverage(),
       findings: inOrder(findings),
       distributions: distributions.tell(),
-      scales: answers.scales(),
+      scales: answers.scales().map((scale) => ({
+        ...scale,
+        sensitivities: dependence.sensitivities(scale.partId).map(({ name, percent }) => ({ name, percent })),
+        sharedAnswers: variety.sharedAnswers(scale.partId),
+      })),
     },
     diagnostics,
   };

@@ -1,5 +1,7 @@
 import { compileExpression } from '../compile/expressions.ts';
-import { drawsShow, finding, shareInWords, type RunningCheck } from './check.ts';
+import { toSI } from '../units/convert.ts';
+import { formatQuantity } from '../units/format.ts';
+import { drawsShow, finding, type RunningCheck } from './check.ts';
 import type { AssayContext } from './context.ts';
 import { measurePart, type PartMeasure } from './measure-part.ts';
 import { recommendBand } from './recommend-band.ts';
@@ -8,6 +10,11 @@ import { routeInWords, type Route } from './routes.ts';
 
 /** Marks that a scale strip shows at most, the closest first. */
 const MOST_MARKS = 30;
+
+/** An answer (in the answer's unit) as a sentence tells it: a figure or two more than is asked for. */
+function inWords({ part: { part, unit } }: PartMeasure, value: number): string {
+  return formatQuantity(toSI(value, unit), unit, { figures: part.answer.figures + 1 }).text;
+}
 
 /** 6. Every honest way of rounding lands inside the band, on every draw that is followed. */
 function tellRoutes(measure: PartMeasure): Finding[] {
@@ -18,11 +25,11 @@ function tellRoutes(measure: PartMeasure): Finding[] {
   );
   if (worst === null) return [];
   const { letter, part } = measure.part;
-  const share = worst.outside.worstBadness;
+  const { value, answer, from, to } = worst.worst ?? { value: NaN, answer: NaN, from: NaN, to: NaN };
   return [
     finding('route-outside-band', {
       about: part.id,
-      statement: `In part (${letter}), ${routeInWords(worst.route, measure.part)} gives an answer ${shareInWords(share)} from the model answer on draw ${worst.outside.worstDraw}, outside the band; ${drawsShow(worst.outside.count)}.`,
+      statement: `In part (${letter}), on draw ${worst.outside.worstDraw}, ${routeInWords(worst.route, measure.part)} gives ${inWords(measure, value)} where the model answer is ${inWords(measure, answer)} and the band goes from ${inWords(measure, from)} to ${inWords(measure, to)}; ${drawsShow(worst.outside.count)}.`,
       cure: 'Widen the band to the recommended one, or ask for fewer figures.',
       place: { partId: part.id },
       tally: worst.outside,
@@ -46,15 +53,20 @@ function tellUniqueness(context: AssayContext, measure: PartMeasure): Finding[] 
       }),
     );
   }
-  for (const { kind, label, reach } of measure.workings) {
+  for (const { kind, label, fits, reach } of measure.workings) {
     if (reach.inside.count === 0) continue;
     // The same value under another name is no wrong answer: both sides of an identity agree everywhere.
     if (kind === 'nearMiss' && Math.abs(reach.furthest) < 1e-9) continue;
+    const code =
+      kind === 'slip' ? 'slip-inside-band' : fits ? 'near-miss-inside-band' : 'near-miss-by-chance';
     findings.push(
-      finding(kind === 'slip' ? 'slip-inside-band' : 'near-miss-inside-band', {
+      finding(code, {
         about: `${part.id}:${label}`,
-        statement: `In part (${letter}) a wrong working (${label}) comes within ${shareInWords(reach.closest)} of the model answer on draw ${reach.draw} and would earn the mark; ${drawsShow(reach.inside.count)}.`,
-        cure: 'Narrow the band, or change the ranges so that the two answers part.',
+        statement: `In part (${letter}) a wrong working (${label}) gives ${inWords(measure, reach.value)} where ${inWords(measure, reach.answer)} is right on draw ${reach.draw}, and would earn the mark; ${drawsShow(reach.inside.count)}.`,
+        cure:
+          code === 'near-miss-by-chance'
+            ? 'The units betray it; a require can leave such draws out.'
+            : 'Narrow the band, change the ranges so that the two answers part, or leave such draws out with a require.',
         place: { partId: part.id },
         tally: reach.inside,
       }),
@@ -128,7 +140,7 @@ function marksOf(measure: PartMeasure): StripMark[] {
 function scaleOf(measure: PartMeasure): PartScale {
   const { part, info } = measure.part;
   const distances = measure.workings
-    .filter(({ reach }) => Math.abs(reach.furthest) >= 1e-9)
+    .filter(({ fits, reach }) => fits && Math.abs(reach.furthest) >= 1e-9)
     .map(({ reach }) => Math.abs(reach.closest));
   const worst: Route | null = measure.worstRoute;
   return {
@@ -155,7 +167,10 @@ function scaleOf(measure: PartMeasure): PartScale {
 }
 
 /** Checks 6, 7 and 8 together, since they look at the same answers; gives the scale strips as well. */
-export function checkAnswers(context: AssayContext): RunningCheck & { scales: () => PartScale[] } {
+export function checkAnswers(context: AssayContext): RunningCheck & {
+  scales: () => PartScale[];
+  coverage: () => string;
+} {
   const measures = context.parts.map((part) => measurePart(context, part));
   return {
     visit: (block) => {
@@ -168,5 +183,12 @@ export function checkAnswers(context: AssayContext): RunningCheck & { scales: ()
         ...tellBand(measure, scaleOf(measure).recommended),
       ]),
     scales: () => measures.map(scaleOf),
+    coverage: () => {
+      const fewest = Math.min(...measures.map((measure) => measure.drawsFollowed));
+      const sampled = measures.some((measure) => measure.stride > 1);
+      return sampled
+        ? `; rounding routes and wrong workings followed on at least ${fewest.toLocaleString('en-GB')} of them, evenly spaced`
+        : '';
+    },
   };
 }

@@ -1,4 +1,6 @@
-import { finding, drawsInWords, Tally, type CheckStart } from './check.ts';
+import { finding, drawsInWords, drawsShow, Tally, type CheckStart } from './check.ts';
+import type { Finding } from './report.ts';
+import { whyUndefined } from './why-undefined.ts';
 
 /** Share of discarded draws above which the writer is told. */
 const MANY_DISCARDED = 0.9;
@@ -28,15 +30,17 @@ export const checkDefined: CheckStart = (context) => {
       }
     },
     finish: () => {
-      const findings = [];
+      const findings: Finding[] = [];
       // What follows from an undefined value is undefined too: only the first name of the chain is told.
       for (const quantity of context.script.quantities) {
         const tally = tallies.get(quantity.name);
         if (tally === undefined || quantity.uses.some((name) => tallies.has(name))) continue;
+        const draw = tally.worstDraw ?? 1;
+        const cause = whyUndefined(context, quantity.name, draw);
         findings.push(
           finding('undefined-value', {
             about: quantity.name,
-            statement: `“${quantity.name}” has no value on ${drawsInWords(tally.count)}, first on draw ${tally.worstDraw}: it divides by zero, takes the root or logarithm of a negative number, or grows beyond all bounds.`,
+            statement: `On draw ${draw} “${quantity.name}” has no value: ${cause}; ${drawsShow(tally.count)}.`,
             cure: 'Tighten the ranges, or add a require that leaves such draws out.',
             place: { span: quantity.span, quantity: quantity.name },
             tally,
@@ -46,14 +50,17 @@ export const checkDefined: CheckStart = (context) => {
       if (seen > 0 && kept === 0) {
         findings.push(
           finding('no-draw-kept', {
-            statement: `None of the ${drawsInWords(seen)} fulfils every require.`,
+            statement:
+              seen === 1
+                ? 'The only draw does not fulfil every require.'
+                : `None of the ${drawsInWords(seen)} fulfils every require.`,
             cure: 'Widen the ranges or loosen a condition.',
           }),
         );
       } else if (seen > 0 && kept / seen < 1 - MANY_DISCARDED) {
         findings.push(
           finding('most-draws-discarded', {
-            statement: `The conditions discard ${((1 - kept / seen) * 100).toFixed(0)} % of the draws; ${kept.toLocaleString('en-GB')} are left.`,
+            statement: `The conditions discard ${((1 - kept / seen) * 100).toPrecision(3)} % of the draws; ${kept.toLocaleString('en-GB')} are left.`,
             cure: 'Narrower ranges would leave fewer draws out.',
           }),
         );

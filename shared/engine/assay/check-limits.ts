@@ -1,5 +1,6 @@
 import { CONSTANTS } from '../physics/constants.ts';
 import { PLAUSIBLE_RANGES } from '../physics/limits.ts';
+import { AIR_BREAKDOWN_FIELD } from '../physics/models.ts';
 import { findRole } from '../physics/roles.ts';
 import { sameDimension } from '../units/dimension.ts';
 import { readUnit } from '../units/read-unit.ts';
@@ -7,17 +8,15 @@ import type { BlockValues } from '../compile/compiled-script.ts';
 import { drawsShow, finding, Tally, type CheckStart } from './check.ts';
 import type { AssayContext } from './context.ts';
 import type { Finding } from './report.ts';
+import { WHOLE_ROLES } from './part-roles.ts';
 import { bindRoles, type BoundSet } from './roles-bound.ts';
 import type { FindingCode } from './severity.ts';
 
 const LIGHT = CONSTANTS.get('c')?.value ?? NaN;
-/** Breakdown field of air at atmospheric pressure, about 3 MV/m (CRC Handbook; value from memory). */
-const AIR_BREAKDOWN = 3e6;
 
 const POSITIVE_KINDS = ['m', 'kg', 'K', 'Hz'].map((unit) => readUnit(unit));
 /** Lengths that may point either way. */
 const SIGNED_ROLES = new Set(['deflection']);
-const WHOLE_ROLES = new Set(['chargeNumber', 'levelNumber', 'diffractionOrder']);
 
 /** One thing that must hold of a value or of two values on every draw. */
 interface Rule {
@@ -125,15 +124,19 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
       cure: 'Lengthen the wavelengths or raise the work functions.',
     });
   }
-  const greatest = set.names.get('greatestKineticEnergy') ?? set.names.get('stoppingPd');
-  if (photons === null && greatest !== undefined) {
+  const claimsNone = context.content.claims.includes('noElectronsEmitted');
+  for (const role of ['greatestKineticEnergy', 'stoppingPd']) {
+    const name = set.names.get(role);
+    // What the photon energy already tells need not be told again.
+    const told = photons !== null && context.content.claims.includes('electronsEmitted');
+    if (name === undefined || claimsNone || told) continue;
     rules.push({
       code: 'no-emission',
-      names: [greatest],
+      names: [name],
       failure: ([energy = 0]) => (energy <= 0 ? -energy : null),
       statement: ([energy], draw, draws) =>
-        `On draw ${draw} “${greatest}” is ${energy}: no electron is freed; ${draws}.`,
-      cure: 'Shorten the wavelengths or lower the work functions.',
+        `On draw ${draw} “${name}” (${findRole(role)?.name ?? role}) is ${energy}, so no electron is freed; ${draws}.`,
+      cure: 'Shorten the wavelengths or lower the work functions, or require that the photon energy is the greater.',
     });
   }
   const plates = pair('deflection', 'plateSeparation');
@@ -152,7 +155,7 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
     rules.push({
       code: 'air-breaks-down',
       names: gap,
-      failure: ([pd = 0, d = 1]) => (pd / d > AIR_BREAKDOWN ? pd / d : null),
+      failure: ([pd = 0, d = 1]) => (pd / d > AIR_BREAKDOWN_FIELD ? pd / d : null),
       statement: ([pd, d], draw, draws) =>
         `On draw ${draw} ${pd} across ${d} is a field above 3 MV m⁻¹, at which air breaks down; ${draws}.`,
       cure: 'Lower the p.d. or widen the gap.',

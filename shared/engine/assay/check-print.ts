@@ -5,37 +5,11 @@ import { sameDimension } from '../units/dimension.ts';
 import { describeDimension } from '../units/quantity-kinds.ts';
 import { readUnit } from '../units/read-unit.ts';
 import { finding, type CheckStart } from './check.ts';
+import { checkPrintedNumbers } from './check-printed-numbers.ts';
+import { mathsMistakes } from './maths-mistakes.ts';
+import { printedTexts } from './printed-texts.ts';
 import type { AssayContext } from './context.ts';
 import type { Finding } from './report.ts';
-
-/** Every text of the item that prints, by field name, in words for a sentence. */
-function printedTexts({
-  content,
-  figures,
-}: AssayContext): { field: string; text: string; words: string; partId?: string }[] {
-  return [
-    { field: 'stem', text: content.stem, words: 'the stem' },
-    ...content.parts.flatMap((part, index) => [
-      {
-        field: `parts.${index}.text`,
-        text: part.text,
-        words: `part (${partLetter(index)})`,
-        partId: part.id,
-      },
-      ...part.scheme.map((line, at) => ({
-        field: `parts.${index}.scheme.${at}.text`,
-        text: line.text,
-        words: `the mark scheme of part (${partLetter(index)})`,
-        partId: part.id,
-      })),
-    ]),
-    ...figures.flatMap((figure) =>
-      figure.svg === null
-        ? []
-        : [{ field: `figure.${figure.figureId}`, text: figure.svg, words: 'a figure' }],
-    ),
-  ];
-}
 
 function holeFindings(context: AssayContext): Finding[] {
   const holes = { script: context.script, quantities: context.content.quantities };
@@ -56,6 +30,41 @@ function holeFindings(context: AssayContext): Finding[] {
         place: { field, partId },
       }),
     );
+  });
+}
+
+function mathsFindings(context: AssayContext): Finding[] {
+  return printedTexts(context)
+    .filter(({ markdown }) => markdown)
+    .flatMap(({ field, text, words, partId }) =>
+      mathsMistakes(text).map(({ message, start, end }) =>
+        finding('maths-mistake', {
+          about: `${field}:${start}`,
+          statement: `In ${words} the formula ${text.slice(start, Math.min(end, start + 40))} cannot print. ${message}`,
+          cure: 'Correct the formula.',
+          place: { field, partId },
+        }),
+      ),
+    );
+}
+
+/** Answers that the candidate can read off the paper. */
+function answerPrinted(context: AssayContext): Finding[] {
+  const texts = printedTexts(context).filter(({ forCandidates }) => forCandidates);
+  return context.parts.flatMap(({ part, letter, info }) => {
+    if (part.kind !== 'numeric') return [];
+    const where = texts.find(({ text }) =>
+      findHoles(text).holes.some((hole) => hole.names.includes(info.name)),
+    );
+    if (where === undefined) return [];
+    return [
+      finding('answer-printed', {
+        about: part.id,
+        statement: `The answer to part (${letter}) is printed in ${where.words}.`,
+        cure: 'Take it out there, or make the part one that shows the value.',
+        place: { partId: part.id, field: where.field },
+      }),
+    ];
   });
 }
 
@@ -136,6 +145,16 @@ function partFindings(context: AssayContext): Finding[] {
         }),
       );
     }
+    if (part.kind === 'showThat' && part.answer.figures <= part.statedFigures) {
+      findings.push(
+        finding('show-that-figures', {
+          about: part.id,
+          statement: `Part (${letter}) states its value to ${part.statedFigures} figures and wants it shown to ${part.answer.figures}: it cannot be told from one copied down.`,
+          cure: 'Ask for at least one figure more than the text states.',
+          place,
+        }),
+      );
+    }
     return findings;
   });
 }
@@ -180,6 +199,17 @@ function figureFindings({ content, figures }: AssayContext): Finding[] {
 }
 
 /** 10. Everything that prints can be printed, and the mark scheme adds up. */
-export const checkPrint: CheckStart = (context) => ({
-  finish: () => [...holeFindings(context), ...partFindings(context), ...figureFindings(context)],
-});
+export const checkPrint: CheckStart = (context) => {
+  const numbers = checkPrintedNumbers(context);
+  return {
+    visit: numbers.visit,
+    finish: () => [
+      ...holeFindings(context),
+      ...mathsFindings(context),
+      ...answerPrinted(context),
+      ...partFindings(context),
+      ...figureFindings(context),
+      ...numbers.finish(),
+    ],
+  };
+};

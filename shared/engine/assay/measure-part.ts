@@ -2,6 +2,7 @@ import { compileExpression, evaluateExpression } from '../compile/expressions.ts
 import { evaluateBlock } from '../compile/evaluate.ts';
 import type { BlockValues } from '../compile/compiled-script.ts';
 import { fromSI } from '../units/convert.ts';
+import { sameDimension } from '../units/dimension.ts';
 import { roundToFigures } from '../units/rounding.ts';
 import { Tally } from './check.ts';
 import type { AssayContext, AssayPart } from './context.ts';
@@ -15,8 +16,10 @@ export interface Reach {
   closest: number;
   /** Signed, furthest from it. */
   furthest: number;
-  /** Draw of the closest approach. */
+  /** Draw of the closest approach, and the two answers there, in the answer's unit. */
   draw: number;
+  value: number;
+  answer: number;
   /** Draws on which the answer lies in the band. */
   inside: Tally;
   /** Closest approach to the band, in half-widths of the band beyond its end; negative inside. */
@@ -28,11 +31,15 @@ export interface MeasuredRoute {
   reach: Reach;
   /** Draws on which this honest answer falls outside the band. */
   outside: Tally;
+  /** On the worst of these, in the answer's unit: the route's answer, the model answer and the band. */
+  worst: { value: number; answer: number; from: number; to: number } | null;
 }
 
 export interface MeasuredWorking {
   kind: 'slip' | 'nearMiss';
   label: string;
+  /** Whether it has the dimension of the answer. */
+  fits: boolean;
   reach: Reach;
 }
 
@@ -51,6 +58,8 @@ export interface PartMeasure {
   bandAbove: number;
   bandMistake: boolean;
   drawsFollowed: number;
+  /** Every so many-th kept draw is followed. */
+  stride: number;
   visit: (block: BlockValues) => void;
 }
 
@@ -61,6 +70,8 @@ const newReach = (): Reach => ({
   closest: Infinity,
   furthest: 0,
   draw: 0,
+  value: NaN,
+  answer: NaN,
   inside: new Tally(),
   margin: Infinity,
 });
@@ -71,6 +82,8 @@ function note(reach: Reach, draw: number, value: number, answer: number, from: n
   if (Math.abs(error) < Math.abs(reach.closest)) {
     reach.closest = error;
     reach.draw = draw;
+    reach.value = value;
+    reach.answer = answer;
   }
   if (Math.abs(error) > Math.abs(reach.furthest)) reach.furthest = error;
   const half = value >= answer ? to - answer : answer - from;
@@ -93,11 +106,54 @@ function thin(context: AssayContext, block: BlockValues, stride: number, offset:
   return evaluateBlock(context.script, Float64Array.from(chosen), { conditions: false });
 }
 
-function slipsOf(context: AssayContext, { part }: AssayPart): { label: string; miss: NearMiss }[] {
-  return part.answer.slips.flatMap((slip) => {
+interface Wrong {
+  working: MeasuredWorking;
+  miss: NearMiss;
+}
+
+function slipsOf(context: AssayContext, { part, info }: AssayPart): Wrong[] {
+  return part.answer.slips.flatMap((slip): Wrong[] => {
     const { expression } = compileExpression(context.script, slip.expression);
     if (expression?.shape.kind !== 'scalar') return [];
-    return [{ label: slip.name || slip.expression, miss: { label: slip.name, expression, factor: 1 } }];
+    const label = slip.name || slip.expression;
+    const fits = sameDimension(expression.dimension, info.dimension);
+    return [
+      {
+        working: { kind: 'slip', label, fits, reach: newReach() },
+        miss: { label, expression, factor: 1, fits },
+      },
+    ];
+  });
+}
+
+/** Two workings whose answers agree so well on every draw are one. */
+const SAME = 1e-9;
+
+function sameColumns(a: Float64Array, b: Float64Array): boolean {
+  return a.every((value, index) => {
+    const other = b[index] ?? NaN;
+    return Math.abs(value - other) <= SAME * Math.abs(other) || (Number.isNaN(value) && Number.isNaN(other));
+  });
+}
+
+/** Answers of a wrong working on the draws of a block, in the answer's unit. */
+function answersOf({ miss }: Wrong, part: AssayPart, sample: BlockValues): Float64Array {
+  return evaluateExpression(miss.expression, sample).map((value) => fromSI(value * miss.factor, part.unit));
+}
+
+/** Leaves out near misses that are the right answer under another name, or an earlier wrong one. */
+function distinct(
+  wrong: readonly Wrong[],
+  part: AssayPart,
+  sample: BlockValues,
+  answers: Float64Array,
+): Wrong[] {
+  const seen = [answers];
+  return wrong.filter((entry) => {
+    const column = answersOf(entry, part, sample);
+    const known = seen.some((other) => sameColumns(column, other));
+    if (!known) seen.push(column);
+    return entry.working.kind === 'slip' || !known;
   });
 }
 
@@ -108,16 +164,12 @@ export function measurePart(context: AssayContext, part: AssayPart): PartMeasure
     route,
     reach: newReach(),
     outside: new Tally(),
+    worst: null,
   }));
-  const slips = slipsOf(context, part);
-  const misses = nearMissesOf(context, part);
-  const wrong = [
-    ...slips.map(({ label, miss }) => ({
-      working: { kind: 'slip' as const, label, reach: newReach() },
-      miss,
-    })),
-    ...misses.map((miss) => ({
-      working: { kind: 'nearMiss' as const, label: miss.label, reach: newReach() },
+  let wrong = [
+    ...slipsOf(context, part),
+    ...nearMissesOf(context, part).map((miss): Wrong => ({
+      working: { kind: 'nearMiss', label: miss.label, fits: miss.fits, reach: newReach() },
       miss,
     })),
   ];
@@ -128,7 +180,7 @@ export function measurePart(context: AssayContext, part: AssayPart): PartMeasure
   const measure: PartMeasure = {
     part,
     routes,
-    workings: wrong.map(({ working }) => working),
+    workings: [],
     below: 0,
     above: 0,
     worstRoute: null,
@@ -137,6 +189,7 @@ export function measurePart(context: AssayContext, part: AssayPart): PartMeasure
     bandAbove: Infinity,
     bandMistake: false,
     drawsFollowed: 0,
+    stride,
     visit: (block) => {
       const sample = thin(context, block, stride, passed);
       for (const kept of block.kept) passed += kept;
@@ -164,7 +217,10 @@ export function measurePart(context: AssayContext, part: AssayPart): PartMeasure
           const error = (value - answer) / Math.abs(answer || 1);
           if (!Number.isFinite(error)) continue;
           note(entry.reach, draw, value, answer, from, to);
-          if (!within(value, from, to)) entry.outside.add(draw, Math.abs(error));
+          if (!within(value, from, to)) {
+            if (Math.abs(error) > entry.outside.worstBadness) entry.worst = { value, answer, from, to };
+            entry.outside.add(draw, Math.abs(error));
+          }
           if (Math.abs(error) > Math.max(measure.above, -measure.below)) {
             measure.worstRoute = entry.route;
             measure.worstRouteDraw = draw;
@@ -173,14 +229,17 @@ export function measurePart(context: AssayContext, part: AssayPart): PartMeasure
           measure.above = Math.max(measure.above, error);
         }
       }
-      for (const { working, miss } of wrong) {
-        const column = evaluateExpression(miss.expression, sample);
+      if (measure.workings.length === 0) {
+        wrong = distinct(wrong, part, sample, bands.answers);
+        measure.workings = wrong.map(({ working }) => working);
+      }
+      for (const entry of wrong) {
+        const column = answersOf(entry, part, sample);
         for (let index = 0; index < column.length; index += 1) {
-          const value = fromSI((column[index] ?? NaN) * miss.factor, part.unit);
           note(
-            working.reach,
+            entry.working.reach,
             sample.draws[index] ?? 0,
-            value,
+            column[index] ?? NaN,
             bands.answers[index] ?? NaN,
             bands.from[index] ?? NaN,
             bands.to[index] ?? NaN,

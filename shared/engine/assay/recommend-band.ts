@@ -4,8 +4,10 @@ import type { PartScale } from './report.ts';
 /** Tidy half-widths, percent: what people write on mark schemes. */
 export const TIDY_PERCENTS = [0.5, 1, 1.5, 2, 2.5, 3, 4, 5, 6, 8, 10, 12, 15, 20] as const;
 
-/** Bands wider than this many times the recommended one are called wide. */
+/** Bands wider than this many times the recommended one are called wide, unless they are narrow in themselves. */
 const WIDE = 3;
+/** Half-width, relative, below which nobody calls a band wide; common practice. */
+const NEVER_WIDE = 0.05;
 
 interface BandQuestion {
   /** Extremes of the honest routes, relative, signed. */
@@ -39,7 +41,7 @@ export function recommendBand(question: BandQuestion): PartScale['recommended'] 
   if (-below > bandBelow + 1e-9 || above > bandAbove + 1e-9) {
     return { percent: tidy, verdict: 'tooTight', reason: `${needs}, more than the band gives${nearest}` };
   }
-  if (own > (WIDE * tidy) / 100) {
+  if (own >= NEVER_WIDE && own > (WIDE * tidy) / 100) {
     return {
       percent: tidy,
       verdict: 'wide',

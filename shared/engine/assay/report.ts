@@ -95,6 +95,10 @@ export const partScaleSchema = z.object({
     verdict: z.enum(['sound', 'tooTight', 'wide', 'impossible']),
     reason: z.string(),
   }),
+  /** Percent by which the answer changes for one percent in each printed value, the median over some draws. */
+  sensitivities: z.array(z.object({ name: z.string(), percent: z.number() })).optional(),
+  /** Chance that of two draws the answer to one earns the mark of the other; null for a single draw. */
+  sharedAnswers: z.number().nullable().optional(),
 });
 export type PartScale = z.infer<typeof partScaleSchema>;
 

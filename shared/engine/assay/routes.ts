@@ -5,11 +5,12 @@ import { fromSI, toSI } from '../units/convert.ts';
 import { roundToFigures } from '../units/rounding.ts';
 import { printingOf } from '../holes/fill-hole.ts';
 import type { AssayContext, AssayPart } from './context.ts';
+import { isWhole, roleOf, WHOLE_ROLES } from './part-roles.ts';
 
 /** One honest way to carry the working. */
 export interface Route {
-  /** Computed names that are rounded to the part's figures before they are used. */
-  rounded: readonly string[];
+  /** Computed names that are rounded before they are used, with the figures that are kept. */
+  rounded: ReadonlyMap<string, number>;
   constants: Extract<ConstantPrecision, string>;
   /** Earlier show-that values taken as the text states them. */
   stated: readonly StatedValue[];
@@ -59,27 +60,47 @@ export function statedValues(context: AssayContext, part: AssayPart): StatedValu
 const LEAST_ROUTE_FIGURES = 3;
 
 /** The figures that a candidate keeps on the way: the part's own, and enough to reach a whole number. */
-export function routeFigures({ part }: AssayPart): number {
-  const exact = part.answer.band.kind === 'absolute' && part.answer.band.plusMinus === 0;
-  return exact ? Math.max(LEAST_ROUTE_FIGURES, part.answer.figures) : part.answer.figures;
+function routeFigures(context: AssayContext, part: AssayPart): number {
+  const { figures } = part.part.answer;
+  return isWhole(context, part) ? Math.max(LEAST_ROUTE_FIGURES, figures) : figures;
 }
 
-/** Every route of a part's working: which results are rounded, which constants and stated values are taken. */
-export function routesOf(context: AssayContext, part: AssayPart): Route[] {
-  const whole = new Set(
-    context.content.quantities.filter(({ role }) => role === 'chargeNumber').map(({ name }) => name),
-  );
-  const intermediates = part.dependencies.intermediates.filter((name) => {
+/** Results on the way that a candidate may round, with the figures: an earlier answer's own, else the part's. */
+function roundable(context: AssayContext, part: AssayPart): Map<string, number> {
+  const usual = routeFigures(context, part);
+  const names = part.dependencies.intermediates.filter((name) => {
     const info = context.script.quantities.find((quantity) => quantity.name === name);
-    return info?.shape.kind === 'scalar' && !whole.has(name);
+    return info?.shape.kind === 'scalar' && !WHOLE_ROLES.has(roleOf(context, name));
   });
+  return new Map(
+    names.map((name) => {
+      const earlier = context.parts.find((other) => other.index < part.index && other.info.name === name);
+      return [name, earlier === undefined ? usual : Math.max(usual, earlier.part.answer.figures)];
+    }),
+  );
+}
+
+/**
+ * Every route of a part's working: which results are rounded (each alone and together to the part's figures;
+ * all together to one more), which constants and which stated values are taken.
+ */
+export function routesOf(context: AssayContext, part: AssayPart): Route[] {
+  const figures = roundable(context, part);
+  const names = [...figures.keys()];
+  const choices = subsets(names).map(
+    (chosen) => new Map(chosen.map((name) => [name, figures.get(name) ?? 1])),
+  );
+  if (names.length > 0) choices.push(new Map(names.map((name) => [name, (figures.get(name) ?? 1) + 1])));
   const constants: Route['constants'][] =
     part.dependencies.constants.length === 0 ? ['full'] : ['full', 'dataSheet'];
   const stated = statedValues(context, part);
   const statedChoices = stated.length === 0 ? [[]] : [[], stated];
-  return subsets(intermediates).flatMap((rounded) =>
+  return choices.flatMap((rounded) =>
     constants.flatMap((precision) =>
-      statedChoices.map((taken) => ({ rounded, constants: precision, stated: taken })),
+      statedChoices
+        // A value that is taken as stated is not worked out, so rounding it makes no other route.
+        .filter((taken) => !taken.some(({ name }) => rounded.has(name)))
+        .map((taken) => ({ rounded, constants: precision, stated: taken })),
     ),
   );
 }
@@ -91,7 +112,6 @@ export function followRoute(
   route: Route,
   block: BlockValues,
 ): Float64Array {
-  const figures = routeFigures(part);
   const pinned = new Map<string, Float64Array>();
   for (const { name, round } of route.stated) {
     const column = block.columns.get(name);
@@ -100,7 +120,7 @@ export function followRoute(
   const values = evaluateBlock(context.script, block.draws, {
     wanted: [part.info.name],
     conditions: false,
-    roundIntermediates: new Map(route.rounded.map((name) => [name, figures])),
+    roundIntermediates: route.rounded,
     constants: route.constants,
     pinned,
   });
@@ -111,20 +131,22 @@ function list(names: readonly string[]): string {
   return names.length < 2 ? (names[0] ?? '') : `${names.slice(0, -1).join(', ')} and ${names.at(-1)}`;
 }
 
+const figuresInWords = (count: number) => `${count} ${count === 1 ? 'figure' : 'figures'}`;
+
 /** A route in the words that a candidate would use. */
 export function routeInWords(route: Route, part: AssayPart): string {
-  const figures = part.part.answer.figures;
-  const pieces: string[] = [];
-  for (const { name, letter, figures: kept } of route.stated) {
-    pieces.push(`taking “${name}” as part (${letter}) states it, to ${kept} figures`);
+  const pieces = route.stated.map(
+    ({ name, letter, figures }) =>
+      `taking “${name}” as part (${letter}) states it, to ${figuresInWords(figures)}`,
+  );
+  const byFigures = new Map<number, string[]>();
+  for (const [name, figures] of route.rounded) {
+    byFigures.set(figures, [...(byFigures.get(figures) ?? []), `“${name}”`]);
   }
-  const rounded = route.rounded.filter((name) => !route.stated.some((taken) => taken.name === name));
-  if (rounded.length > 0) {
-    pieces.push(
-      `rounding ${list(rounded.map((name) => `“${name}”`))} to ${routeFigures(part)} figures on the way`,
-    );
+  for (const [figures, names] of byFigures) {
+    pieces.push(`rounding ${list(names)} to ${figuresInWords(figures)} on the way`);
   }
   if (route.constants === 'dataSheet') pieces.push('using the data sheet’s constants');
   if (pieces.length === 0) pieces.push('carrying everything in full');
-  return `${pieces.join(', ')}, and rounding the answer to ${figures} ${figures === 1 ? 'figure' : 'figures'}`;
+  return `${pieces.join(', ')}, and rounding the answer to ${figuresInWords(part.part.answer.figures)}`;
 }

@@ -30,7 +30,8 @@ export const SEVERITY_TABLE = {
     'The answer is the same on every draw: its givens cancel.',
   ],
   'answer-on-data-sheet': ['dependence', 'caution', 'The answer could be quoted instead of worked out.'],
-  'sought-constant-used': ['dependence', 'note', 'The readings are made from the constant that is sought.'],
+  'sought-constant-used': ['dependence', 'caution', 'The working uses the constant that it asks for.'],
+  'given-cancels': ['dependence', 'note', 'The working uses a value that does not move its answer.'],
   'given-unused': ['dependence', 'note', 'A printed value that no answer needs.'],
   // routes
   'route-outside-band': ['routes', 'blocker', 'An honest way of rounding loses the mark.'],
@@ -38,6 +39,11 @@ export const SEVERITY_TABLE = {
   'slip-inside-band': ['uniqueness', 'blocker', 'A known mistake earns the mark by luck.'],
   'slip-mistake': ['uniqueness', 'blocker', 'The slip’s expression cannot be worked out.'],
   'near-miss-inside-band': ['uniqueness', 'caution', 'A likely wrong working earns the mark on some draw.'],
+  'near-miss-by-chance': [
+    'uniqueness',
+    'note',
+    'A wrong working whose units are wrong too has the right number on some draw.',
+  ],
   // band
   'band-mistake': ['band', 'blocker', 'The band cannot be worked out, so nothing can be marked.'],
   'band-too-wide': ['band', 'note', 'The band is much wider than honest rounding needs.'],
@@ -45,6 +51,8 @@ export const SEVERITY_TABLE = {
   // variety
   'few-answers': ['variety', 'caution', 'Different draws give the same answer.'],
   'answer-equals-given': ['variety', 'note', 'The answer is printed in the question on some draw.'],
+  'answers-shared': ['variety', 'note', 'Answers of different draws often earn each other’s mark.'],
+  'equal-givens': ['variety', 'note', 'Two printed values can be taken for each other unseen.'],
   // print
   'hole-mistake': ['print', 'blocker', 'A value would be missing from the printed text.'],
   'maths-mistake': ['print', 'blocker', 'The formula cannot be printed.'],
@@ -55,6 +63,9 @@ export const SEVERITY_TABLE = {
   'figure-missing': ['print', 'blocker', 'The figure stands nowhere in the item.'],
   'value-not-stated': ['print', 'caution', 'A part that shows a value should state it.'],
   'awkward-number': ['print', 'note', 'Numbers from 0.1 to 1000 in their unit read best.'],
+  'answer-printed': ['print', 'caution', 'The candidate can copy the answer from the paper.'],
+  'show-that-figures': ['print', 'caution', 'A value shown must be finer than the value stated.'],
+  'ambiguous-zeros': ['print', 'note', 'Figures are enforced that the givens leave open.'],
   'text-empty': ['print', 'caution', 'The part asks nothing.'],
 } as const satisfies Record<string, readonly [Check, Severity, string]>;
 
