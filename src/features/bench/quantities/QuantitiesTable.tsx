@@ -54,8 +54,7 @@ export function QuantitiesTable(props: QuantitiesTableProps) {
             <th scope="col">Figures</th>
             <th scope="col">Stands for</th>
             <th scope="col">Set</th>
-            <th scope="col">At this draw</th>
-            <th scope="col">Over the draws</th>
+            <th scope="col">At this draw, and over the draws</th>
           </tr>
         </thead>
         <tbody>
@@ -104,8 +103,6 @@ export function QuantitiesTable(props: QuantitiesTableProps) {
                 <td>{textField(row, 'set', 'Set', '–')}</td>
                 <td className="whitespace-nowrap tabular-nums">
                   {row.value === '' ? <span className="text-muted">undefined</span> : row.value}
-                </td>
-                <td>
                   {distribution !== undefined && (
                     <DistributionStrip distribution={distribution} current={printedNumber(row.value)} />
                   )}
