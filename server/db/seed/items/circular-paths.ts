@@ -31,7 +31,7 @@ v = 2 * Va / (B * r)`,
       ],
       assumptions: ['uniformField', 'fromRest'],
       acceptedCautions: {
-        'few-answers:charge':
+        'answer-on-data-sheet:charge:e/m_e':
           'The item asks for a constant, so the answers stay together; the givens and the working differ on every draw.',
       },
       parts: [
