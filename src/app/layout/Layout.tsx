@@ -1,8 +1,9 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { Suspense, useEffect, useRef } from 'react';
+import { Suspense, useEffect, useRef, useState } from 'react';
 import { NavLink, Outlet, useLocation, useNavigate } from 'react-router';
 
 import type { SignedInPerson } from '#shared/contracts/session.ts';
+import { AppError } from '#shared/errors/app-error.ts';
 import { Failure, Loading } from '#src/components/ui/states.tsx';
 import { endSession, sessionQuery } from '#src/features/session/api.ts';
 import { sentenceOf } from '#src/lib/api.ts';
@@ -18,12 +19,22 @@ const LAMPS: readonly { lamp: Lamp; name: string }[] = [
   { lamp: 'off', name: 'off' },
 ];
 
-function TopLine({ person }: { person: SignedInPerson }) {
+function TopLine({ person, onLeft }: { person: SignedInPerson; onLeft: () => void }) {
   const [lamp, setLamp] = useLamp();
   const queries = useQueryClient();
   const navigate = useNavigate();
+  const [problem, setProblem] = useState<string | null>(null);
   const leave = async () => {
-    await endSession();
+    try {
+      await endSession();
+    } catch (error) {
+      if (!(error instanceof AppError && error.code === 'notSignedIn')) {
+        setProblem(sentenceOf(error));
+        return;
+      }
+    }
+    onLeft();
+    // Nothing that this person saw stays for the next one at this browser.
     queries.clear();
     void navigate('/');
   };
@@ -68,6 +79,11 @@ function TopLine({ person }: { person: SignedInPerson }) {
         </div>
       </div>
       <div className="tick-rule mt-2" aria-hidden="true" />
+      {problem !== null && (
+        <p role="alert" className="pt-2 text-lead">
+          {problem}
+        </p>
+      )}
     </header>
   );
 }
@@ -87,31 +103,39 @@ function usePageArrival() {
   return main;
 }
 
+/**
+ * The person whose screens are open. A session that ends by itself leaves them there, so that nothing typed is
+ * lost; signing out, or another person signing in, does not.
+ */
+function usePersonHere(person: SignedInPerson | null | undefined) {
+  const [here, setHere] = useState<SignedInPerson | null>(null);
+  if (person !== undefined && person !== null && person !== here) setHere(person);
+  return { here: person ?? here, leave: () => setHere(null) };
+}
+
 /** The house: top line, the screen, and what stands ready on every screen. */
 export function Layout() {
   const session = useQuery(sessionQuery);
+  const { here: person, leave } = usePersonHere(session.data?.person);
   const main = usePageArrival();
-  if (session.isPending)
+  if (person === null) {
+    if (session.isSuccess) return <SignInPage />;
     return (
       <div className="p-8">
-        <Loading what="Graticule" />
-      </div>
-    );
-  if (session.isError) {
-    return (
-      <div className="p-8">
-        <Failure message={sentenceOf(session.error)} onRetry={() => void session.refetch()} />
+        {session.isPending ? (
+          <Loading what="Graticule" />
+        ) : (
+          <Failure message={sentenceOf(session.error)} onRetry={() => void session.refetch()} />
+        )}
       </div>
     );
   }
-  const { person } = session.data;
-  if (person === null) return <SignInPage />;
   return (
     <>
       <a href="#main" className="skip-link">
         Skip to the content
       </a>
-      <TopLine person={person} />
+      <TopLine person={person} onLeft={leave} />
       <main
         id="main"
         ref={main}
@@ -119,11 +143,11 @@ export function Layout() {
         className="mx-auto w-full max-w-[100rem] px-4 py-6 outline-none sm:px-8"
       >
         <Suspense fallback={<Loading what="this screen" />}>
-          <Outlet context={person} />
+          <Outlet key={person.id} context={person} />
         </Suspense>
       </main>
       <Shortcuts abilities={person.abilities} />
-      <SessionEnd email={person.email} />
+      <SessionEnd email={person.email} isOver={session.data?.person === null} />
     </>
   );
 }

@@ -6,11 +6,16 @@ import { sessionQuery } from '#src/features/session/api.ts';
 import { SignInForm } from '#src/features/session/SignInForm.tsx';
 import { onSessionEnd } from '#src/lib/api.ts';
 
-/** When the session has ended: sign in again without leaving the screen, so that nothing typed is lost. */
-export function SessionEnd({ email }: { email: string }) {
-  const [ended, setEnded] = useState(false);
+/** When the session has ended (a request was refused, or `isOver` by the server's word): sign in again without leaving the screen, so that nothing typed is lost. */
+export function SessionEnd({ email, isOver }: { email: string; isOver: boolean }) {
+  const [ended, setEnded] = useState(isOver);
+  const [wasOver, setWasOver] = useState(isOver);
   const queries = useQueryClient();
   useEffect(() => onSessionEnd(() => setEnded(true)), []);
+  if (isOver !== wasOver) {
+    setWasOver(isOver);
+    setEnded(isOver);
+  }
   return (
     <Dialog
       title="Sign in again"

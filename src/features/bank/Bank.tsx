@@ -4,6 +4,7 @@ import { useNavigate, useSearchParams } from 'react-router';
 
 import type { ItemQuery } from '#shared/contracts/items.ts';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
+import { Pager } from '#src/components/ui/Pager.tsx';
 import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
 import { sentenceOf } from '#src/lib/api.ts';
 import { countOf } from '#src/lib/format.ts';
@@ -32,7 +33,6 @@ export function Bank({ mayWrite }: { mayWrite: boolean }) {
     [setSearch],
   );
   const total = page.data?.total ?? 0;
-  const pages = Math.max(1, Math.ceil(total / query.pageSize));
   return (
     <div className="grid gap-5">
       <div className="flex flex-wrap items-baseline justify-between gap-4">
@@ -62,28 +62,13 @@ export function Bank({ mayWrite }: { mayWrite: boolean }) {
           onSort={(sort, direction) => change({ sort, direction })}
         />
       )}
-      {pages > 1 && (
-        <nav aria-label="Pages" className="flex items-center gap-4">
-          <button
-            type="button"
-            className="button"
-            disabled={query.page <= 1}
-            onClick={() => change({ page: String(query.page - 1) })}
-          >
-            Previous
-          </button>
-          <span>
-            Page {query.page} of {pages}
-          </span>
-          <button
-            type="button"
-            className="button"
-            disabled={query.page >= pages}
-            onClick={() => change({ page: String(query.page + 1) })}
-          >
-            Next
-          </button>
-        </nav>
+      {page.isSuccess && (
+        <Pager
+          page={query.page}
+          pageSize={query.pageSize}
+          total={total}
+          onPage={(next) => change({ page: String(next) })}
+        />
       )}
       <Dialog title="New item" open={beginning} onClose={() => setBeginning(false)}>
         <NewItemForm onBegun={(itemId) => void navigate(`/items/${itemId}`)} />

@@ -1,6 +1,6 @@
 import { createColumnHelper, flexRender, getCoreRowModel, useReactTable } from '@tanstack/react-table';
 import type { KeyboardEvent } from 'react';
-import { Link, useNavigate } from 'react-router';
+import { Link } from 'react-router';
 
 import type { ITEM_SORTS, ItemQuery, ItemRow } from '#shared/contracts/items.ts';
 import { ITEM_STATE_NAMES } from '#shared/domain/item-life.ts';
@@ -87,7 +87,6 @@ function moveRow(event: KeyboardEvent<HTMLTableSectionElement>): void {
 
 /** One page of the bank. */
 export function BankTable({ rows, query, onSort }: BankTableProps) {
-  const navigate = useNavigate();
   const table = useReactTable({
     data: rows,
     columns,
@@ -134,11 +133,7 @@ export function BankTable({ rows, query, onSort }: BankTableProps) {
         </thead>
         <tbody onKeyDown={moveRow}>
           {table.getRowModel().rows.map((row) => (
-            <tr
-              key={row.id}
-              className="cursor-pointer"
-              onClick={() => void navigate(`/items/${row.original.id}`)}
-            >
+            <tr key={row.id} className="row-link">
               {row.getVisibleCells().map((cell) => (
                 <td key={cell.id} className={NUMBERS.has(cell.column.id) ? 'number' : ''}>
                   {flexRender(cell.column.columnDef.cell, cell.getContext())}

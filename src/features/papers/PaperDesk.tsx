@@ -7,6 +7,7 @@ import { AppError } from '#shared/errors/app-error.ts';
 import type { PaperScheme, PaperSheet } from '#shared/sheet/model.ts';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
 import { Failure, Loading } from '#src/components/ui/states.tsx';
+import { Tabs } from '#src/components/ui/Tabs.tsx';
 import { sentenceOf } from '#src/lib/api.ts';
 import { paperCalls, paperQuery, paperSheetQuery, papersQuery, type Place, placesOf } from './api.ts';
 import { DetailsForm } from './DetailsForm.tsx';
@@ -76,8 +77,19 @@ export function PaperDesk(props: PaperDeskProps) {
     }
   };
   const saveDetails = async (details: PaperDetails) => {
-    show(await calls.saveDetails(paper.version, details));
-    setDialog(null);
+    try {
+      show(await calls.saveDetails(paper.version, details));
+      setDialog(null);
+    } catch (error) {
+      const stored = error instanceof AppError ? paperSchema.safeParse(error.current) : null;
+      if (stored?.success !== true) throw error;
+      // The form keeps what was typed; saving once more goes over the paper as it now stands.
+      show(stored.data);
+      throw new AppError(
+        'conflict',
+        'Somebody else changed this paper meanwhile. What you typed is still here; save again to put it in place of theirs.',
+      );
+    }
   };
 
   return (
@@ -99,45 +111,38 @@ export function PaperDesk(props: PaperDeskProps) {
         </div>
       </div>
       <Exports paper={paper} calls={calls} />
-      <div role="tablist" aria-label="Views of the paper" className="flex gap-6 border-b border-ink">
-        {VIEWS.map((each) => (
-          <button
-            key={each.view}
-            type="button"
-            role="tab"
-            aria-selected={view === each.view}
-            className={`cursor-pointer pb-1 ${view === each.view ? 'border-b-[3px] border-accent' : 'text-muted hover:text-ink'}`}
-            onClick={() => setView(each.view)}
-          >
-            {each.name}
-          </button>
-        ))}
-      </div>
       {problem !== null && (
         <p role="alert" className="notice notice-blocker">
           {problem}
         </p>
       )}
-      {view === 'order' ? (
-        <div className="grid gap-10 xl:grid-cols-[minmax(0,1fr)_24rem]">
-          <div>
-            <RunningOrder
-              paper={paper}
-              readOnly={!mayEdit}
-              busy={busy}
-              onSave={(places) => void save(places)}
-            />
-            {mayEdit && (
-              <button type="button" className="button mt-4" disabled={busy} onClick={() => setDialog('pick')}>
-                Pick items
-              </button>
-            )}
+      <Tabs label="Views of the paper" views={VIEWS} view={view} onView={setView}>
+        {view === 'order' ? (
+          <div className="grid gap-10 xl:grid-cols-[minmax(0,1fr)_24rem]">
+            <div>
+              <RunningOrder
+                paper={paper}
+                readOnly={!mayEdit}
+                busy={busy}
+                onSave={(places) => void save(places)}
+              />
+              {mayEdit && (
+                <button
+                  type="button"
+                  className="button mt-4"
+                  disabled={busy}
+                  onClick={() => setDialog('pick')}
+                >
+                  Pick items
+                </button>
+              )}
+            </div>
+            <PaperAside paper={paper} />
           </div>
-          <PaperAside paper={paper} />
-        </div>
-      ) : (
-        <Preview {...props} view={view} />
-      )}
+        ) : (
+          <Preview {...props} view={view} />
+        )}
+      </Tabs>
       <Dialog title="Details of the paper" open={dialog === 'details'} onClose={() => setDialog(null)}>
         <DetailsForm details={paper} action="Save the details" onSave={saveDetails} />
       </Dialog>

@@ -35,15 +35,13 @@ export function PaperList() {
         </thead>
         <tbody>
           {papers.data.papers.map((paper) => (
-            <tr key={paper.id}>
+            <tr key={paper.id} className="row-link">
               <td>
                 <Link className="link font-mono text-sm" to={`/papers/${paper.id}`}>
                   {paper.code}
                 </Link>
               </td>
-              <td className="w-full">
-                <Link to={`/papers/${paper.id}`}>{paper.title}</Link>
-              </td>
+              <td className="w-full">{paper.title}</td>
               <td>{PAPER_STATE_NAMES[paper.state]}</td>
               <td className="number">{paper.items}</td>
               <td className="number whitespace-nowrap">

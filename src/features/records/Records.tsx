@@ -3,6 +3,7 @@ import { useSearchParams } from 'react-router';
 
 import { choosePeople } from '#shared/contracts/people.ts';
 import { listRecords } from '#shared/contracts/records.ts';
+import { Pager } from '#src/components/ui/Pager.tsx';
 import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
 import { call, sentenceOf } from '#src/lib/api.ts';
 import { countOf, formatDayAndTime } from '#src/lib/format.ts';
@@ -38,7 +39,6 @@ export function Records() {
       else next.set(name, value);
       return next;
     });
-  const pages = records.isSuccess ? Math.max(1, Math.ceil(records.data.total / records.data.pageSize)) : 1;
   return (
     <div className="grid gap-5">
       <div className="flex flex-wrap items-end gap-4">
@@ -101,28 +101,13 @@ export function Records() {
           </table>
         </div>
       )}
-      {pages > 1 && (
-        <nav aria-label="Pages" className="flex items-center gap-4">
-          <button
-            type="button"
-            className="button"
-            disabled={page <= 1}
-            onClick={() => choose('page', String(page - 1))}
-          >
-            Previous
-          </button>
-          <span>
-            Page {page} of {pages}
-          </span>
-          <button
-            type="button"
-            className="button"
-            disabled={page >= pages}
-            onClick={() => choose('page', String(page + 1))}
-          >
-            Next
-          </button>
-        </nav>
+      {records.isSuccess && (
+        <Pager
+          page={page}
+          pageSize={records.data.pageSize}
+          total={records.data.total}
+          onPage={(next) => choose('page', String(next))}
+        />
       )}
     </div>
   );
