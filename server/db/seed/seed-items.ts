@@ -27,7 +27,13 @@ async function addFigures(
   const figures: ItemContent['figures'] = [];
   for (const figure of demo.figures ?? []) {
     const bytes = await readFile(join(projectFolder(import.meta.url), 'public', 'figures', figure.file));
-    const stored = await addFigure(context, writer, itemId, { name: figure.file, bytes }, new AbortController().signal);
+    const stored = await addFigure(
+      context,
+      writer,
+      itemId,
+      { name: figure.file, bytes },
+      new AbortController().signal,
+    );
     figures.push({
       figureId: stored.id,
       alternativeText: figure.alternativeText,
