@@ -3,6 +3,8 @@ import { fileURLToPath } from 'node:url';
 
 import { defineConfig } from 'vitest/config';
 
+import { workerCount } from './support/worker-count.ts';
+
 const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
 
 /** Threads of the engine start slowly from their sources, ms. */
@@ -16,6 +18,7 @@ export default defineConfig({
   // The client's own configuration concerns its bundle alone.
   cacheDir: path.join(root, 'node_modules/.vite-tests'),
   test: {
+    maxWorkers: workerCount,
     testTimeout: TEST_TIMEOUT,
     hookTimeout: TEST_TIMEOUT,
     projects: [

@@ -58,7 +58,7 @@ function tests(name, what) {
     run: async (env) => {
       const file = inData(`report-${process.pid}-${name}.json`);
       const args = ['run', '--config', 'tests/vitest.config.ts', '--project', name];
-      const reporters = ['--reporter=dot', '--reporter=json', `--outputFile.json=${file}`];
+      const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${file}`];
       const script = inProject('node_modules/vitest/vitest.mjs');
       const { code } = await attempt('node', [script, ...args, ...reporters], { env, show: true });
       const outcome = readReport(file, what, code);
@@ -85,7 +85,13 @@ const build = {
 /** @type {readonly Step[]} in the order they run */
 export const steps = [
   check('format', 'formatting', 'prettier/bin/prettier.cjs', ['--check', '--log-level', 'warn', '.']),
-  check('lint', 'lint', 'eslint/bin/eslint.js', ['.', '--max-warnings', '0']),
+  check('lint', 'lint', 'eslint/bin/eslint.js', [
+    '--config',
+    '.eslint.config.mjs',
+    '--max-warnings',
+    '0',
+    '.',
+  ]),
   check('types', 'types', 'typescript/bin/tsc', ['--noEmit', '-p', 'tsconfig.json']),
   check('directions', 'dependency directions', 'dependency-cruiser/bin/dependency-cruise.mjs', [
     '--config',

@@ -3,15 +3,13 @@ import mysql from 'mysql2/promise';
 import { applyMigrations } from '#server/db/apply-migrations.ts';
 
 import { serverUrl, workerDatabaseUrl } from './database.ts';
-
-/** Workers that Vitest may number; more than a small machine has, and cheap. */
-const WORKERS = Number(process.env['TEST_DATABASES'] ?? '2');
+import { workerCount } from './worker-count.ts';
 
 /** Gives each worker an empty, migrated database before the first test. */
 export async function setup(): Promise<void> {
   const connection = await mysql.createConnection(serverUrl());
   try {
-    for (let worker = 1; worker <= WORKERS; worker += 1) {
+    for (let worker = 1; worker <= workerCount; worker += 1) {
       const url = workerDatabaseUrl(worker);
       const name = new URL(url).pathname.slice(1);
       await connection.query(`drop database if exists \`${name}\``);
