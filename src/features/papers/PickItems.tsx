@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useDeferredValue, useState } from 'react';
 
 import type { Paper } from '#shared/contracts/papers.ts';
 import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
@@ -16,7 +16,7 @@ interface PickItemsProps {
 export function PickItems({ paper, onPick }: PickItemsProps) {
   const [search, setSearch] = useState('');
   const [picked, setPicked] = useState<ReadonlySet<number>>(new Set());
-  const items = useQuery(approvedItemsQuery(search));
+  const items = useQuery(approvedItemsQuery(useDeferredValue(search)));
   const onPaper = new Set(paper.places.map((place) => place.itemId));
   const rows = items.data?.rows.filter((row) => !onPaper.has(row.id)) ?? [];
   const toggle = (id: number) =>

@@ -1,4 +1,4 @@
-import { useState, type KeyboardEvent } from 'react';
+import { useEffect, useRef, useState, type KeyboardEvent } from 'react';
 import { Link } from 'react-router';
 
 import type { Paper, PaperPlace } from '#shared/contracts/papers.ts';
@@ -72,6 +72,33 @@ export function RunningOrder({ paper, readOnly, busy, onSave }: RunningOrderProp
   const change = (index: number, part: Partial<Place>) =>
     onSave(places.map((place, at) => (at === index ? { ...place, ...part } : place)));
   const disabled = readOnly || busy;
+  const body = useRef<HTMLTableSectionElement>(null);
+  /** The button that moved a row: the page loses the focus of a row that changes its place. */
+  const moving = useRef<string | null>(null);
+  const [told, setTold] = useState('');
+  useEffect(() => {
+    if (busy || moving.current === null) return;
+    const [row, name] = moving.current.split(' ');
+    moving.current = null;
+    const buttons = body.current?.querySelectorAll<HTMLButtonElement>(
+      `[data-item="${row}"] button[data-move]`,
+    );
+    const usable = Array.from(buttons ?? []).filter((button) => !button.disabled);
+    (usable.find((button) => button.dataset['move'] === name) ?? usable[0])?.focus();
+  }, [busy, paper]);
+  const move = (index: number, by: -1 | 1) => {
+    const place = paper.places[index];
+    const to = index + by;
+    if (busy || readOnly || place === undefined || to < 0 || to >= places.length) return;
+    moving.current = `${place.itemId} ${by < 0 ? 'up' : 'down'}`;
+    setTold(`${place.itemCode} moves to place ${to + 1} of ${places.length}.`);
+    onSave(moved(places, index, to));
+  };
+  const moveByKey = (event: KeyboardEvent, index: number) => {
+    if (!event.altKey || (event.key !== 'ArrowUp' && event.key !== 'ArrowDown')) return;
+    event.preventDefault();
+    move(index, event.key === 'ArrowUp' ? -1 : 1);
+  };
   return (
     <div className="overflow-x-auto">
       <table className="list-table">
@@ -87,9 +114,14 @@ export function RunningOrder({ paper, readOnly, busy, onSave }: RunningOrderProp
             {!readOnly && <th scope="col">Place</th>}
           </tr>
         </thead>
-        <tbody>
+        <tbody ref={body}>
           {paper.places.map((place, index) => (
-            <tr key={place.itemId} id={`place-${place.id}`}>
+            <tr
+              key={place.itemId}
+              id={`place-${place.id}`}
+              data-item={place.itemId}
+              onKeyDown={(event) => moveByKey(event, index)}
+            >
               <td>{place.position}</td>
               <td className="w-full min-w-48">
                 <Link className="link font-mono text-sm" to={`/items/${place.itemId}`}>
@@ -127,7 +159,8 @@ export function RunningOrder({ paper, readOnly, busy, onSave }: RunningOrderProp
                     className="link"
                     disabled={busy || index === 0}
                     aria-label={`Move ${place.itemCode} up`}
-                    onClick={() => onSave(moved(places, index, index - 1))}
+                    data-move="up"
+                    onClick={() => move(index, -1)}
                   >
                     up
                   </button>{' '}
@@ -136,7 +169,8 @@ export function RunningOrder({ paper, readOnly, busy, onSave }: RunningOrderProp
                     className="link"
                     disabled={busy || index === places.length - 1}
                     aria-label={`Move ${place.itemCode} down`}
-                    onClick={() => onSave(moved(places, index, index + 1))}
+                    data-move="down"
+                    onClick={() => move(index, 1)}
                   >
                     down
                   </button>{' '}
@@ -155,6 +189,12 @@ export function RunningOrder({ paper, readOnly, busy, onSave }: RunningOrderProp
           ))}
         </tbody>
       </table>
+      <p role="status" className="sr-only">
+        {told}
+      </p>
+      {!readOnly && places.length > 1 && (
+        <p className="pt-2 text-sm text-muted">Alt with an arrow key moves the row that holds the cursor.</p>
+      )}
       {paper.places.length === 0 && <p className="py-4 text-muted">No item yet.</p>}
     </div>
   );

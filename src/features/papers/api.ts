@@ -1,4 +1,4 @@
-import { queryOptions } from '@tanstack/react-query';
+import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 
 import { listItems } from '#shared/contracts/items.ts';
 import {
@@ -47,6 +47,7 @@ export const approvedItemsQuery = (search: string) =>
         query: { state: 'approved', search, sort: 'code', direction: 'ascending', pageSize: 100 },
         signal,
       }),
+    placeholderData: keepPreviousData,
   });
 
 /** One place as it is saved. */

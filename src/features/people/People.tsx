@@ -12,6 +12,8 @@ const peopleQuery = queryOptions({
   queryFn: ({ signal }) => call(listPeople, { signal }),
 });
 
+const nameOf = (role: Role) => `${role[0]?.toUpperCase() ?? ''}${role.slice(1)}`;
+
 function PersonRow({ person }: { person: Person }) {
   const queries = useQueryClient();
   const [problem, setProblem] = useState<string | null>(null);
@@ -64,14 +66,23 @@ export function People() {
     return <Failure message={sentenceOf(people.error)} onRetry={() => void people.refetch()} />;
   return (
     <div className="overflow-x-auto">
+      <dl className="mb-6 grid max-w-3xl grid-cols-[auto_minmax(0,1fr)] gap-x-6 gap-y-1 text-sm">
+        {ROLES.map((role) => (
+          <div key={role} className="contents">
+            <dt>{nameOf(role)}</dt>
+            <dd id={`role-${role}`} className="text-muted">
+              {ROLE_DESCRIPTIONS[role]}
+            </dd>
+          </div>
+        ))}
+      </dl>
       <table className="list-table max-w-5xl">
         <thead>
           <tr>
             <th scope="col">Person</th>
             {ROLES.map((role) => (
-              <th key={role} scope="col" title={ROLE_DESCRIPTIONS[role]}>
-                {role[0]?.toUpperCase()}
-                {role.slice(1)}
+              <th key={role} scope="col" aria-describedby={`role-${role}`}>
+                {nameOf(role)}
               </th>
             ))}
             <th scope="col">Last here</th>
