@@ -8,12 +8,14 @@ import { Bench } from '#src/features/bench/Bench.tsx';
 import type { BenchSlots } from '#src/features/bench/slots.ts';
 import { ChangesView } from '#src/features/changes/ChangesView.tsx';
 import { ScaleStrip } from '#src/features/scale-strip/ScaleStrip.tsx';
+import { SchemeView } from '#src/features/sheet/SchemeView.tsx';
 import { SheetView } from '#src/features/sheet/SheetView.tsx';
 import { sentenceOf } from '#src/lib/api.ts';
 import { usePerson } from '../layout/use-person.ts';
 
 const SLOTS: BenchSlots = {
   sheet: (sheet, inserts) => <SheetView sheet={sheet} {...inserts} />,
+  scheme: (scheme) => <SchemeView scheme={scheme} />,
   scale: (request) => <ScaleStrip {...request} />,
   changes: (before, after) => <ChangesView before={before} after={after} />,
 };

@@ -12,6 +12,7 @@ import { BenchActions } from './BenchActions.tsx';
 import { BenchHeader } from './BenchHeader.tsx';
 import { BenchSheet } from './BenchSheet.tsx';
 import { BenchWorkings } from './BenchWorkings.tsx';
+import { FaceChoice } from './FaceChoice.tsx';
 import { useLiveCheck } from './check/use-live-check.ts';
 import { ConflictView } from './conflict/ConflictView.tsx';
 import { useDraft } from './draft/use-draft.ts';
@@ -55,6 +56,7 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
   const [theirs, setTheirs] = useState<Item | null>(opening.kind === 'conflict' ? item : null);
   const [base, setBase] = useState(opening.kind === 'conflict' ? null : server.content);
   const [restored, setRestored] = useState(opening.kind === 'restored' ? opening.keptAt : null);
+  const [face, setFace] = useState<'sheet' | 'scheme'>('sheet');
   const [editing, setEditing] = useState<string | null>(null);
   const editor = useRef<ScriptEditorHandle>(null);
   const topics = useQuery(topicsQuery).data?.topics ?? [item.topic];
@@ -118,6 +120,7 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
       case 'stem':
       case 'part': {
         const place = target.kind === 'stem' ? 'stem' : target.partId;
+        setFace('sheet');
         if (!readOnly) setEditing(place);
         goTo(`part-${place}`);
       }
@@ -232,19 +235,24 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
               onMove={move}
               onDraw={onDraw}
             />
-            <BenchSheet
-              draft={draft}
-              content={content}
-              topics={topics}
-              view={check.view}
-              report={report}
-              readOnly={readOnly}
-              editing={editing}
-              onEditing={setEditing}
-              onVisitDraw={onDraw}
-              onUpload={calls.upload}
-              slots={slots}
-            />
+            <FaceChoice face={face} onFace={setFace} />
+            {face === 'scheme' && check.view !== null ? (
+              slots.scheme(check.view.scheme)
+            ) : (
+              <BenchSheet
+                draft={draft}
+                content={content}
+                topics={topics}
+                view={check.view}
+                report={report}
+                readOnly={readOnly}
+                editing={editing}
+                onEditing={setEditing}
+                onVisitDraw={onDraw}
+                onUpload={calls.upload}
+                slots={slots}
+              />
+            )}
           </div>
         </div>
       )}

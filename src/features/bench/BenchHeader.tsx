@@ -31,7 +31,7 @@ export function BenchHeader(props: BenchHeaderProps) {
   return (
     <header className="bench-header">
       <div className="min-w-0 flex-1 basis-96">
-        <h1 className="truncate text-xl font-semibold">
+        <h1 className="text-xl font-semibold">
           <span className="font-mono text-base font-normal text-muted">{item.code}</span>{' '}
           {content.title === '' ? 'Untitled item' : content.title}
         </h1>

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 
 import type { ItemContent, PartScale } from '#shared/engine/index.ts';
-import type { ItemSheet } from '#shared/sheet/model.ts';
+import type { ItemScheme, ItemSheet } from '#shared/sheet/model.ts';
 
 /** What the bench puts between the pieces of the sheet. */
 export interface SheetInserts {
@@ -22,6 +22,7 @@ export interface ScaleRequest {
 /** Pictures that other features draw; the page hands them in. */
 export interface BenchSlots {
   sheet: (sheet: ItemSheet, inserts: SheetInserts) => ReactNode;
+  scheme: (scheme: ItemScheme) => ReactNode;
   scale: (request: ScaleRequest) => ReactNode;
   changes: (before: ItemContent, after: ItemContent) => ReactNode;
 }

@@ -33,7 +33,7 @@ export function DrawBar({ draw, kept, gridSize, open, worstDraw, onMove, onDraw 
     </button>
   );
   return (
-    <div role="group" aria-label="Draw" className="flex flex-wrap items-center gap-x-2 gap-y-1">
+    <div role="group" aria-label="Draw" className="bench-draws flex flex-wrap items-center gap-x-2 gap-y-1">
       {step('first', 'First', '|‹')}
       {step('previous', 'Previous', '‹')}
       <form

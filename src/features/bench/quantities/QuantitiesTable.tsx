@@ -54,7 +54,7 @@ export function QuantitiesTable(props: QuantitiesTableProps) {
             <th scope="col">Figures</th>
             <th scope="col">Stands for</th>
             <th scope="col">Set</th>
-            <th scope="col">At this draw, and over the draws</th>
+            <th scope="col">At this draw</th>
           </tr>
         </thead>
         <tbody>
