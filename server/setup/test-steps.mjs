@@ -101,7 +101,7 @@ export const steps = [
     'shared',
     'tests',
   ]),
-  check('unused', 'unused code', 'knip/bin/knip.js', ['--no-progress']),
+  check('unused', 'unused code', 'knip/bin/knip.js', ['--config', '.knip.json', '--no-progress']),
   tests('unit', 'unit tests'),
   tests('integration', 'integration tests'),
   build,
