@@ -9,8 +9,10 @@ import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
 import { sentenceOf } from '#src/lib/api.ts';
 import { countOf } from '#src/lib/format.ts';
 import { bankQuery, readBankQuery } from './api.ts';
+import { keepHidden, readHidden } from './bank-columns.ts';
 import { BankFilters } from './BankFilters.tsx';
 import { BankTable } from './BankTable.tsx';
+import { ColumnChoice } from './ColumnChoice.tsx';
 import { NewItemForm } from './NewItemForm.tsx';
 
 /** All items: searched, filtered, sorted and paged by the server; the address says how. */
@@ -18,6 +20,7 @@ export function Bank({ mayWrite }: { mayWrite: boolean }) {
   const [search, setSearch] = useSearchParams();
   const navigate = useNavigate();
   const [beginning, setBeginning] = useState(false);
+  const [hidden, setHidden] = useState(() => readHidden(localStorage));
   const query = readBankQuery(search);
   const page = useQuery(bankQuery(query));
   const change = useCallback(
@@ -39,11 +42,20 @@ export function Bank({ mayWrite }: { mayWrite: boolean }) {
         <p className="text-muted" role="status">
           {page.isSuccess ? countOf(total, 'item') : ''}
         </p>
-        {mayWrite && (
-          <button type="button" className="button button-primary" onClick={() => setBeginning(true)}>
-            New item
-          </button>
-        )}
+        <div className="flex flex-wrap items-baseline gap-6">
+          <ColumnChoice
+            hidden={hidden}
+            onHidden={(next) => {
+              setHidden(next);
+              keepHidden(localStorage, next);
+            }}
+          />
+          {mayWrite && (
+            <button type="button" className="button button-primary" onClick={() => setBeginning(true)}>
+              New item
+            </button>
+          )}
+        </div>
       </div>
       <BankFilters query={query} onChange={change} />
       {page.isPending && <Loading what="the bank" />}
@@ -59,6 +71,7 @@ export function Bank({ mayWrite }: { mayWrite: boolean }) {
         <BankTable
           rows={page.data.rows}
           query={query}
+          hidden={hidden}
           onSort={(sort, direction) => change({ sort, direction })}
         />
       )}

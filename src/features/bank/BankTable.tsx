@@ -6,12 +6,14 @@ import type { ITEM_SORTS, ItemQuery, ItemRow } from '#shared/contracts/items.ts'
 import { ITEM_STATE_NAMES } from '#shared/domain/item-life.ts';
 import { SeverityWord } from '#src/components/ui/SeverityWord.tsx';
 import { formatDay } from '#src/lib/format.ts';
+import type { OptionalColumn } from './bank-columns.ts';
 
 type Sort = (typeof ITEM_SORTS)[number];
 
 interface BankTableProps {
   rows: ItemRow[];
   query: ItemQuery;
+  hidden: readonly OptionalColumn[];
   onSort: (sort: Sort, direction: ItemQuery['direction']) => void;
 }
 
@@ -86,12 +88,13 @@ function moveRow(event: KeyboardEvent<HTMLTableSectionElement>): void {
 }
 
 /** One page of the bank. */
-export function BankTable({ rows, query, onSort }: BankTableProps) {
+export function BankTable({ rows, query, hidden, onSort }: BankTableProps) {
   const table = useReactTable({
     data: rows,
     columns,
     getCoreRowModel: getCoreRowModel(),
     manualSorting: true,
+    state: { columnVisibility: Object.fromEntries(hidden.map((id) => [id, false])) },
   });
   const ariaSort = (id: string) => (query.sort === id ? query.direction : 'none');
   return (
