@@ -47,10 +47,13 @@ function speedRules(context: AssayContext): Rule[] {
 
 function positiveRules(context: AssayContext): Rule[] {
   const roles = new Map(context.content.quantities.map((quantity) => [quantity.name, quantity.role]));
+  const asked = new Set(context.parts.map(({ info }) => info.name));
   return context.script.quantities
     .filter(
       (info) =>
         info.shape.kind === 'scalar' &&
+        // A step of the working that stands for nothing may be a difference of either sign.
+        (info.kind !== 'computed' || asked.has(info.name) || (roles.get(info.name) ?? null) !== null) &&
         !SIGNED_ROLES.has(roles.get(info.name) ?? '') &&
         POSITIVE_KINDS.some((kind) => kind.ok && sameDimension(info.dimension, kind.unit.dimension)),
     )

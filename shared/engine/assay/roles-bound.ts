@@ -22,6 +22,19 @@ const PARTICLES: readonly { constant: string; words: RegExp; charges: number }[]
   { constant: 'm_alpha', words: /alpha/i, charges: 2 },
 ];
 
+/** Of several particles whose masses a script uses, the one that the texts speak of; where they are silent, its first. */
+function spokenOf(
+  context: AssayContext,
+  particles: typeof PARTICLES,
+): (typeof PARTICLES)[number] | undefined {
+  const text = [context.content.stem, ...context.content.parts.map((part) => part.text)].join('\n');
+  const spoken = particles.filter(({ words }) => words.test(text));
+  if (spoken.length > 0) return spoken.length === 1 ? spoken[0] : undefined;
+  const first = context.script.quantities.flatMap(({ constants }) => constants);
+  const constant = first.find((name) => particles.some((particle) => particle.constant === name));
+  return particles.find((particle) => particle.constant === constant);
+}
+
 function particleOf(context: AssayContext, set: string, names: Iterable<string>): BoundSet['particle'] {
   const byWord = PARTICLES.find(({ words }) => set !== '' && words.test(set));
   const used = new Set<string>();
@@ -34,7 +47,7 @@ function particleOf(context: AssayContext, set: string, names: Iterable<string>)
     }
   }
   const masses = PARTICLES.filter(({ constant }) => used.has(constant));
-  const particle = byWord ?? (masses.length === 1 ? masses[0] : undefined);
+  const particle = byWord ?? (masses.length > 1 ? spokenOf(context, masses) : masses[0]);
   if (particle === undefined) {
     return masses.length === 0 && used.has('e') ? { mass: NaN, charge: value('e') } : null;
   }
