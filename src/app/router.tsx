@@ -1,6 +1,6 @@
 import { createBrowserRouter, Navigate } from 'react-router';
 
-import { ErrorPage } from './layout/ErrorPage.tsx';
+import { ErrorPage, NothingHere } from './layout/ErrorPage.tsx';
 import { Layout } from './layout/Layout.tsx';
 import { DeskPage } from './pages/DeskPage.tsx';
 
@@ -43,7 +43,7 @@ export const router = createBrowserRouter([
             path: '/records',
             lazy: async () => ({ Component: (await import('./pages/RecordsPage.tsx')).RecordsPage }),
           },
-          { path: '*', element: <ErrorPage /> },
+          { path: '*', element: <NothingHere /> },
         ],
       },
     ],

@@ -3,6 +3,7 @@ import type { z } from 'zod';
 import type { Endpoint } from '#shared/contracts/endpoint.ts';
 import { getSession, type SessionReply } from '#shared/contracts/session.ts';
 import { AppError, problemSchema } from '#shared/errors/app-error.ts';
+import { reportReachable } from './connection.ts';
 
 /** What goes into a call; parts that the contract leaves empty may be left out. */
 interface CallInput<Params, Query, Body> {
@@ -22,28 +23,38 @@ export class NoConnection extends Error {
   }
 }
 
+/** Asks the person to sign in again; gives whether they did. */
+type SignInAgain = () => Promise<boolean>;
+
 let csrfToken: string | null = null;
-const sessionListeners = new Set<() => void>();
+let signInAgain: SignInAgain | null = null;
 
 /** Remembers the token that changing requests carry; every session reply brings one. */
 export function rememberSession(session: SessionReply): void {
   csrfToken = session.csrfToken;
 }
 
-/** Calls `listener` whenever the server says that nobody is signed in any more. Returns how to stop. */
-export function onSessionEnd(listener: () => void): () => void {
-  sessionListeners.add(listener);
-  return () => sessionListeners.delete(listener);
+/**
+ * While a screen is open: requests that find the session ended wait for `ask`, and go out once more when the
+ * person has signed in again. Returns how to stop.
+ */
+export function whenSessionEnds(ask: SignInAgain): () => void {
+  signInAgain = ask;
+  return () => {
+    if (signInAgain === ask) signInAgain = null;
+  };
 }
 
 /** The path of an endpoint with its parameters and query filled in. */
 export function pathOf(endpoint: Pick<Endpoint, 'path'>, params: unknown, query: unknown): string {
-  const values = (params ?? {}) as Record<string, unknown>;
+  // Every contract’s parameters and query are of these kinds.
+  type Sent = Record<string, string | number | boolean | null | undefined>;
+  const values = (params ?? {}) as Sent;
   const path = endpoint.path.replace(/:(\w+)/g, (_whole, name: string) =>
     encodeURIComponent(String(values[name])),
   );
   const search = new URLSearchParams();
-  for (const [name, value] of Object.entries((query ?? {}) as Record<string, unknown>)) {
+  for (const [name, value] of Object.entries((query ?? {}) as Sent)) {
     if (value !== undefined && value !== null && value !== '') search.set(name, String(value));
   }
   const text = search.toString();
@@ -59,24 +70,39 @@ async function problemOf(response: Response): Promise<AppError> {
   return new AppError(code, detail, { current, ...(fields === undefined ? {} : { fields }) });
 }
 
-async function send(path: string, init: RequestInit, isRetry = false): Promise<Response> {
+/** What has been tried already for a request, so that nothing is tried for ever. */
+interface Tried {
+  token?: true;
+  signIn?: true;
+}
+
+async function fetchReply(path: string, init: RequestInit): Promise<Response> {
+  try {
+    const response = await fetch(path, { ...init, credentials: 'same-origin' });
+    reportReachable(true);
+    return response;
+  } catch (error) {
+    if (error instanceof DOMException && error.name === 'AbortError') throw error;
+    reportReachable(false);
+    throw new NoConnection(error);
+  }
+}
+
+async function send(path: string, init: RequestInit, tried: Tried = {}): Promise<Response> {
   const changes = init.method !== 'GET';
   if (changes && csrfToken === null) rememberSession(await call(getSession));
   const headers = new Headers(init.headers);
   if (changes && csrfToken !== null) headers.set('x-csrf-token', csrfToken);
-  const response = await fetch(path, { ...init, headers, credentials: 'same-origin' }).catch(
-    (error: unknown) => {
-      if (error instanceof DOMException && error.name === 'AbortError') throw error;
-      throw new NoConnection(error);
-    },
-  );
+  const response = await fetchReply(path, { ...init, headers });
   if (response.ok) return response;
   const problem = await problemOf(response);
-  if (problem.code === 'badCsrfToken' && !isRetry) {
+  if (problem.code === 'badCsrfToken' && tried.token === undefined) {
     csrfToken = null;
-    return send(path, init, true);
+    return send(path, init, { ...tried, token: true });
   }
-  if (problem.code === 'notSignedIn') for (const listener of sessionListeners) listener();
+  if (problem.code === 'notSignedIn' && tried.signIn === undefined && (await signInAgain?.()) === true) {
+    return send(path, init, { signIn: true });
+  }
   throw problem;
 }
 
@@ -120,8 +146,11 @@ export async function sendFile(
 }
 
 /** Fetches a file and hands it to the browser to save under the name that the server gives it. */
-export async function download(endpoint: Endpoint, params: unknown): Promise<void> {
-  const response = await send(pathOf(endpoint, params, {}), { method: endpoint.method });
+export async function download(endpoint: Endpoint, params: unknown, signal?: AbortSignal): Promise<void> {
+  const response = await send(pathOf(endpoint, params, {}), {
+    method: endpoint.method,
+    ...(signal === undefined ? {} : { signal }),
+  });
   const name = /filename="([^"]+)"/.exec(response.headers.get('content-disposition') ?? '')?.[1] ?? 'export';
   const address = URL.createObjectURL(await response.blob());
   const link = document.createElement('a');

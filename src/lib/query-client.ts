@@ -10,10 +10,13 @@ export function createQueryClient(): QueryClient {
     defaultOptions: {
       queries: {
         staleTime: 15_000,
+        // Without a connection a screen says so, and asks again when the connection is back.
+        networkMode: 'always',
+        refetchOnReconnect: true,
         retry: (failures, error) => failures < 2 && !isFinal(error),
         refetchOnWindowFocus: true,
       },
-      mutations: { retry: false },
+      mutations: { retry: false, networkMode: 'always' },
     },
   });
 }

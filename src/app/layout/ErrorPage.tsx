@@ -1,25 +1,27 @@
-import { isRouteErrorResponse, Link, useRouteError } from 'react-router';
+import { isRouteErrorResponse, useRouteError } from 'react-router';
 
 import { AppError } from '#shared/errors/app-error.ts';
-import { sentenceOf } from '#src/lib/api.ts';
+import { WholeFailure } from '#src/components/ui/states.tsx';
+import { usePageTitle } from './use-page-title.ts';
+
+/** An address that leads nowhere. */
+export function NothingHere() {
+  usePageTitle('Nothing stands here');
+  return (
+    <WholeFailure
+      error={new AppError('notFound', 'The address leads nowhere, or the thing is no longer there.')}
+    />
+  );
+}
 
 /** Whatever went wrong on a screen, as a sentence with a way out. */
 export function ErrorPage() {
   const error = useRouteError();
-  const missing = isRouteErrorResponse(error) || (error instanceof AppError && error.code === 'notFound');
+  usePageTitle('Something went wrong');
+  if (isRouteErrorResponse(error)) return <NothingHere />;
   return (
-    <div className="mx-auto max-w-prose px-4 py-16">
-      <h1 className="mb-4 text-2xl font-semibold">
-        {missing ? 'Nothing stands here' : 'Something went wrong'}
-      </h1>
-      <p className="mb-6">
-        {missing ? 'The address leads nowhere, or the thing is no longer there.' : sentenceOf(error)}
-      </p>
-      <p>
-        <Link className="link" to="/desk" reloadDocument={!missing}>
-          Go to the desk
-        </Link>
-      </p>
+    <div className="mx-auto w-full max-w-[100rem] px-4 sm:px-8">
+      <WholeFailure error={error} onRetry={() => window.location.reload()} />
     </div>
   );
 }

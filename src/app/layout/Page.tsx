@@ -1,4 +1,6 @@
-import { useEffect, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
+
+import { usePageTitle } from './use-page-title.ts';
 
 interface PageProps {
   title: string;
@@ -9,9 +11,7 @@ interface PageProps {
 
 /** A screen with its title, which is also the title of the window. */
 export function Page({ title, aside, children }: PageProps) {
-  useEffect(() => {
-    document.title = `${title} · Graticule`;
-  }, [title]);
+  usePageTitle(title);
   return (
     <>
       <div className="mb-5 flex flex-wrap items-baseline justify-between gap-4">

@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react';
+import { useEffect } from 'react';
 import { useNavigate } from 'react-router';
 
 import type { Action } from '#shared/domain/permissions.ts';
@@ -8,6 +8,8 @@ import { SECTIONS } from './sections.ts';
 const EVERYWHERE: readonly [keys: string, what: string][] = [
   ['?', 'Show this list'],
   ['Ctrl or Cmd + Enter', 'Submit the form that holds the cursor'],
+  ['/', 'Go to the search of a list'],
+  ['Alt + arrow up, Alt + arrow down', 'Move an item within the running order of a paper'],
   ['Arrow up, arrow down', 'Go from row to row of a table, or from mark to mark of a scale'],
   ['Escape', 'Close a dialog'],
 ];
@@ -19,9 +21,15 @@ function isTyping(target: EventTarget | null): boolean {
   );
 }
 
+interface ShortcutsProps {
+  abilities: readonly Action[];
+  /** Whether the list of keys is on show. */
+  shown: boolean;
+  onShow: (shown: boolean) => void;
+}
+
 /** Keys that work on every screen, and their list behind `?`. */
-export function Shortcuts({ abilities }: { abilities: readonly Action[] }) {
-  const [open, setOpen] = useState(false);
+export function Shortcuts({ abilities, shown, onShow }: ShortcutsProps) {
   const navigate = useNavigate();
   const sections = SECTIONS.filter((section) => abilities.includes(section.ability));
   useEffect(() => {
@@ -32,17 +40,24 @@ export function Shortcuts({ abilities }: { abilities: readonly Action[] }) {
         if (form !== null) form.requestSubmit();
         return;
       }
+      if (event.key === '/' && !isTyping(event.target)) {
+        const search = document.querySelector<HTMLInputElement>('main input[type="search"]');
+        if (search !== null) {
+          event.preventDefault();
+          search.focus();
+        }
+      }
       if (isTyping(event.target) || event.ctrlKey || event.metaKey || event.altKey) return;
-      if (event.key === '?') setOpen(true);
+      if (event.key === '?') onShow(true);
       const section = armed ? sections.find(({ shortcut }) => shortcut === event.key) : undefined;
       if (section !== undefined) void navigate(section.path);
       armed = event.key === 'g';
     };
     window.addEventListener('keydown', onKey);
     return () => window.removeEventListener('keydown', onKey);
-  }, [navigate, sections]);
+  }, [navigate, sections, onShow]);
   return (
-    <Dialog title="Keys" open={open} onClose={() => setOpen(false)}>
+    <Dialog title="Keys" open={shown} onClose={() => onShow(false)}>
       <dl className="grid grid-cols-[auto_1fr] gap-x-6 gap-y-2">
         {[
           ...EVERYWHERE,

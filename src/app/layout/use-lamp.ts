@@ -1,29 +1,30 @@
 import { useEffect, useState } from 'react';
 
 const KEY = 'graticule.lamp';
-export type Lamp = 'system' | 'on' | 'off';
 
-function stored(): Lamp {
-  const value = localStorage.getItem(KEY);
-  return value === 'on' || value === 'off' ? value : 'system';
-}
+/** Light or dark: as the system says, or as this person chose in this browser. */
+export const LAMPS = [
+  { lamp: 'system', name: 'as the system' },
+  { lamp: 'on', name: 'on' },
+  { lamp: 'off', name: 'off' },
+] as const;
+type Lamp = (typeof LAMPS)[number]['lamp'];
+
+const lampOf = (value: string | null): Lamp => LAMPS.find(({ lamp }) => lamp === value)?.lamp ?? 'system';
 
 /** Puts the lamp setting on the page: light or dark, following the system unless a person chose. */
 export function applyLamp(): void {
-  const lamp = stored();
+  const lamp = lampOf(localStorage.getItem(KEY));
   const dark = lamp === 'off' || (lamp === 'system' && matchMedia('(prefers-color-scheme: dark)').matches);
   document.documentElement.dataset['lamp'] = dark ? 'off' : 'on';
 }
 
-/** The lamp setting of this browser and how to change it. */
-export function useLamp(): [Lamp, (lamp: Lamp) => void] {
-  const [lamp, setLamp] = useState<Lamp>(stored);
+/** The lamp setting of this browser and how to change it; what it cannot mean is taken as the system's. */
+export function useLamp(): [Lamp, (lamp: string) => void] {
+  const [lamp, setLamp] = useState<Lamp>(() => lampOf(localStorage.getItem(KEY)));
   useEffect(() => {
     localStorage.setItem(KEY, lamp);
     applyLamp();
-    const media = matchMedia('(prefers-color-scheme: dark)');
-    media.addEventListener('change', applyLamp);
-    return () => media.removeEventListener('change', applyLamp);
   }, [lamp]);
-  return [lamp, setLamp];
+  return [lamp, (next) => setLamp(lampOf(next))];
 }

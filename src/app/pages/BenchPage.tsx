@@ -1,8 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
-import { useEffect } from 'react';
 import { useParams, useSearchParams } from 'react-router';
 
-import { Failure, Loading } from '#src/components/ui/states.tsx';
+import { Awaited } from '#src/components/ui/Awaited.tsx';
 import { itemQuery } from '#src/features/bench/api.ts';
 import { Bench } from '#src/features/bench/Bench.tsx';
 import type { BenchSlots } from '#src/features/bench/slots.ts';
@@ -10,7 +9,7 @@ import { ChangesView } from '#src/features/changes/ChangesView.tsx';
 import { ScaleStrip } from '#src/features/scale-strip/ScaleStrip.tsx';
 import { SchemeView } from '#src/features/sheet/SchemeView.tsx';
 import { SheetView } from '#src/features/sheet/SheetView.tsx';
-import { sentenceOf } from '#src/lib/api.ts';
+import { usePageTitle } from '../layout/use-page-title.ts';
 import { usePerson } from '../layout/use-person.ts';
 
 const SLOTS: BenchSlots = {
@@ -33,21 +32,20 @@ export function BenchPage() {
   const [search, setSearch] = useSearchParams();
   const item = useQuery(itemQuery(itemId));
   const title = item.data === undefined ? 'Bench' : `${item.data.code} ${item.data.revision.content.title}`;
-  useEffect(() => {
-    document.title = `${title} · Graticule`;
-  }, [title]);
+  usePageTitle(title);
 
-  if (item.isPending) return <Loading what="the item" />;
-  if (item.isError) return <Failure message={sentenceOf(item.error)} onRetry={() => void item.refetch()} />;
-  const { revision, state } = item.data;
   return (
-    <Bench
-      key={`${itemId} ${revision.id} ${state}`}
-      item={item.data}
-      personId={person.id}
-      draw={drawOf(search.get('draw'))}
-      onDraw={(draw) => setSearch({ draw: String(draw) }, { replace: true, preventScrollReset: true })}
-      slots={SLOTS}
-    />
+    <Awaited query={item} what="the item" whole>
+      {(data) => (
+        <Bench
+          key={`${itemId} ${data.revision.id} ${data.state}`}
+          item={data}
+          personId={person.id}
+          draw={drawOf(search.get('draw'))}
+          onDraw={(draw) => setSearch({ draw: String(draw) }, { replace: true, preventScrollReset: true })}
+          slots={SLOTS}
+        />
+      )}
+    </Awaited>
   );
 }

@@ -1,8 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
-import { useEffect } from 'react';
 import { useNavigate, useParams } from 'react-router';
 
-import { Failure, Loading } from '#src/components/ui/states.tsx';
+import { Awaited } from '#src/components/ui/Awaited.tsx';
 import { ChangesView } from '#src/features/changes/ChangesView.tsx';
 import { reviewQuery } from '#src/features/review/api.ts';
 import { ReviewDesk } from '#src/features/review/ReviewDesk.tsx';
@@ -10,7 +9,7 @@ import type { ReviewSlots } from '#src/features/review/slots.ts';
 import { ScaleStrip } from '#src/features/scale-strip/ScaleStrip.tsx';
 import { SchemeView } from '#src/features/sheet/SchemeView.tsx';
 import { SheetView } from '#src/features/sheet/SheetView.tsx';
-import { sentenceOf } from '#src/lib/api.ts';
+import { usePageTitle } from '../layout/use-page-title.ts';
 
 const SLOTS: ReviewSlots = {
   sheet: (sheet) => <SheetView sheet={sheet} />,
@@ -25,15 +24,13 @@ export function ReviewPage() {
   const reviewId = Number(useParams()['reviewId']);
   const review = useQuery(reviewQuery(reviewId));
   const title = review.data === undefined ? 'Review' : `Review of ${review.data.itemCode}`;
-  useEffect(() => {
-    document.title = `${title} · Graticule`;
-  }, [title]);
+  usePageTitle(title);
 
-  if (review.isPending) return <Loading what="the review" />;
-  if (review.isError) {
-    return <Failure message={sentenceOf(review.error)} onRetry={() => void review.refetch()} />;
-  }
   return (
-    <ReviewDesk key={reviewId} review={review.data} onReleased={() => void navigate('/desk')} slots={SLOTS} />
+    <Awaited query={review} what="the review" whole>
+      {(data) => (
+        <ReviewDesk key={reviewId} review={data} onReleased={() => void navigate('/desk')} slots={SLOTS} />
+      )}
+    </Awaited>
   );
 }

@@ -1,20 +1,18 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useEffect } from 'react';
 
 import { sessionQuery } from '#src/features/session/api.ts';
 import { SignInForm } from '#src/features/session/SignInForm.tsx';
+import { usePageTitle } from '../layout/use-page-title.ts';
 
 /** Where everyone begins; after it the screen that was asked for is shown. */
 export function SignInPage() {
   const queries = useQueryClient();
-  useEffect(() => {
-    document.title = 'Sign in · Graticule';
-  }, []);
+  usePageTitle('Sign in');
   return (
-    <main className="mx-auto grid min-h-screen max-w-sm content-center gap-8 px-4 py-12">
+    <main className="mx-auto grid min-h-screen max-w-sm content-center gap-8 py-12">
       <div>
-        <h1 className="text-4xl font-semibold tracking-tight">Graticule</h1>
-        <div className="tick-rule my-3" aria-hidden="true" />
+        <h1 className="wordmark text-5xl">Graticule</h1>
+        <div className="tick-rule my-4" aria-hidden="true" />
         <p className="text-muted">Items whose every answer has been checked, draw by draw.</p>
       </div>
       <SignInForm onSignedIn={(session) => queries.setQueryData(sessionQuery.queryKey, session)} />
