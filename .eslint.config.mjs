@@ -37,6 +37,10 @@ export default tseslint.config(
       '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'inline-type-imports' }],
       '@typescript-eslint/ban-ts-comment': 'error',
       '@typescript-eslint/no-non-null-assertion': 'error',
+      // What someone else threw is passed on as it is.
+      '@typescript-eslint/prefer-promise-reject-errors': ['error', { allowThrowingUnknown: true }],
+      // A function may have to return a promise, whatever it waits for.
+      '@typescript-eslint/require-await': 'off',
       // tsc reports these already.
       '@typescript-eslint/no-unused-vars': 'off',
     },
@@ -45,7 +49,7 @@ export default tseslint.config(
     rules: {
       'no-eval': 'error',
       'no-new-func': 'error',
-      eqeqeq: ['error', 'always'],
+      eqeqeq: ['error', 'always', { null: 'ignore' }],
       'max-lines': ['error', { max: 300, skipBlankLines: true, skipComments: true }],
       'no-restricted-syntax': ['error', noEnvironment],
     },

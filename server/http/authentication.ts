@@ -82,7 +82,7 @@ export function createAuthentication(context: AppContext, identity: Identity): A
     middleware: [sessions, authenticator.session() as RequestHandler],
     signIn: (request) =>
       new Promise((resolve, reject) => {
-        const settle = (error: unknown) => (error ? reject(error as Error) : resolve());
+        const settle = (error: unknown) => (error ? reject(error) : resolve());
         const check = authenticator.authenticate(
           'local',
           (error: unknown, person?: Express.User | false | null) => {
@@ -97,7 +97,7 @@ export function createAuthentication(context: AppContext, identity: Identity): A
       }),
     signOut: (request) =>
       new Promise((resolve, reject) => {
-        request.logout((error: unknown) => (error ? reject(error as Error) : resolve()));
+        request.logout((error: unknown) => (error ? reject(error) : resolve()));
       }),
   };
 }

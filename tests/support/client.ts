@@ -50,7 +50,7 @@ export class Client {
     if (token !== null) request.set('x-csrf-token', token);
     if (parts.body !== undefined) request.send(parts.body as object);
     const { status, body, headers } = await request;
-    return { status, body: body as Problem, headers: headers as Record<string, string> };
+    return { status, body: body as Problem, headers };
   }
 
   /** Calls an endpoint that must succeed; gives its reply. */

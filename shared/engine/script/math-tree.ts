@@ -255,7 +255,7 @@ export function readMathTree(
     return { tree: null, diagnostics: [errorAt(item?.span ?? whole, 'unreadable', message)] };
   }
   try {
-    return { tree: new TreeReader(source, whole).read(node as NodeView), diagnostics: [] };
+    return { tree: new TreeReader(source, whole).read(node), diagnostics: [] };
   } catch (error) {
     if (error instanceof TreeProblem) return { tree: null, diagnostics: [error.diagnostic] };
     throw error;

@@ -43,7 +43,7 @@ export function keptDraft(
   storage: DraftStorage,
   key: { personId: number; itemId: number },
 ): KeptDraft | null {
-  let text: string | null = null;
+  let text: string | null;
   try {
     text = storage.getItem(slot(key.personId, key.itemId));
   } catch {
