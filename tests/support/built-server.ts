@@ -36,7 +36,8 @@ async function makeDatabase(name: string): Promise<string> {
 async function runOnce(script: string, environment: NodeJS.ProcessEnv): Promise<void> {
   const child = spawn(process.execPath, [script], { env: environment, stdio: ['ignore', 'pipe', 'pipe'] });
   let output = '';
-  for (const stream of [child.stdout, child.stderr]) stream.on('data', (piece: Buffer) => (output += piece.toString()));
+  for (const stream of [child.stdout, child.stderr])
+    stream.on('data', (piece: Buffer) => (output += piece.toString()));
   const [code] = await once(child, 'close');
   if (code !== 0) throw new Error(`${path.basename(script)} failed. ${output}`);
 }
