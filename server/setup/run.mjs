@@ -45,6 +45,8 @@ export function attempt(
 export async function run(program, args, options) {
   const { code, output } = await attempt(program, args, options);
   if (code === 0) return output;
-  const end = output.trim().split('\n').slice(-15).join('\n');
+  // The frames of a stack say little to whoever starts the product.
+  const lines = output.split('\n').filter((line) => line.trim() !== '' && !/^ +at /.test(line));
+  const end = lines.slice(-15).join('\n');
   throw new SetupError(`${program} ${args.slice(0, 3).join(' ')} failed with code ${code}.\n${end}`);
 }
