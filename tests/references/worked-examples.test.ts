@@ -43,7 +43,10 @@ function itemOf(example: WorkedExample): ItemContent {
 function answersReached(script: CompiledScript, quantity: string, unit: string, figures: number): number[] {
   const reading = readUnit(unit);
   if (!reading.ok) throw new Error(reading.message);
-  const between = script.quantities.filter(({ name }) => name !== quantity).map(({ name }) => name);
+  // Values that the book prints are not rounded, only what is worked out from them.
+  const between = script.quantities
+    .filter(({ name, uses, constants }) => name !== quantity && uses.length + constants.length > 0)
+    .map(({ name }) => name);
   const answers: number[] = [];
   for (let chosen = 0; chosen < 2 ** between.length; chosen += 1) {
     const rounded = between.filter((_, index) => (chosen & (1 << index)) !== 0);

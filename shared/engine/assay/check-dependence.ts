@@ -96,8 +96,10 @@ function unusedGivens(context: AssayContext): Finding[] {
       findHoles(text).holes.flatMap((hole) => hole.names.map((name) => name.replace(/\[.*$/, ''))),
     ),
   );
+  const readable = new Set(context.printed.map(({ name }) => name));
   return context.script.quantities
-    .filter((info) => info.kind !== 'computed' && printed.has(info.name) && !needed.has(info.name))
+    .filter(({ name, kind }) => kind !== 'computed' || readable.has(name))
+    .filter(({ name }) => printed.has(name) && !needed.has(name))
     .map((info) =>
       finding('given-unused', {
         about: info.name,

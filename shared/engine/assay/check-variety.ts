@@ -85,9 +85,7 @@ function tellPart(context: AssayContext, entry: Watched): Finding[] {
 export function checkVariety(
   context: AssayContext,
 ): RunningCheck & { sharedAnswers: (partId: string) => number | null } {
-  const givens = context.script.quantities.filter(
-    (info) => info.kind !== 'computed' && info.shape.kind === 'scalar',
-  );
+  const givens = context.printed;
   const watched: Watched[] = context.parts.map((part) => ({
     part,
     different: new Set(),

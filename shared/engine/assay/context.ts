@@ -32,13 +32,30 @@ export interface AssayContext {
   plan: DrawPlan;
   figures: readonly FigureFacts[];
   parts: readonly AssayPart[];
+  /** Single values that stand in the question: drawn, given, or written into the script as they are. */
+  printed: readonly QuantityInfo[];
   /** A value (SI) of a named quantity in words: as it prints, in its unit. */
   print: (name: string, value: number) => string;
-  /** The symbol that stands for a name in a sentence. */
-  symbol: (name: string) => string;
 }
 
 const SENTENCE_FIGURES = 3;
+
+/** Whether a value is written into the script as it is, as `d = 4.00 cm`: the candidate reads it and works nothing out. */
+function isFixed(info: QuantityInfo): boolean {
+  return info.kind === 'computed' && info.uses.length === 0 && info.constants.length === 0;
+}
+
+/** What an answer rests on, with fixed values counted among the givens. */
+function restsOn(script: CompiledScript, name: string): Dependencies {
+  const found = dependenciesOf(script, name);
+  const fixed = new Set(script.quantities.filter(isFixed).map((info) => info.name));
+  const given = new Set([...found.givens, ...found.intermediates.filter((inner) => fixed.has(inner))]);
+  return {
+    ...found,
+    givens: found.names.filter((inner) => given.has(inner)),
+    intermediates: found.intermediates.filter((inner) => !fixed.has(inner)),
+  };
+}
 
 /** Prepares what the checks share. Parts whose quantity or unit does not fit are left to the print check. */
 export function createAssayContext(
@@ -61,7 +78,7 @@ export function createAssayContext(
         index,
         info,
         unit: reading.unit,
-        dependencies: dependenciesOf(script, info.name),
+        dependencies: restsOn(script, info.name),
       },
     ];
   });
@@ -71,12 +88,14 @@ export function createAssayContext(
     plan,
     figures,
     parts,
+    printed: script.quantities.filter(
+      (info) => info.shape.kind === 'scalar' && (info.kind !== 'computed' || isFixed(info)),
+    ),
     print: (name, value) => {
       const printing = printingOf(holes, name);
       if ('problem' in printing) return String(value);
       const precision = printing.info.kind === 'drawn' ? printing.precision : { figures: SENTENCE_FIGURES };
       return formatQuantity(value, printing.unit, precision).text;
     },
-    symbol: (name) => name,
   };
 }

@@ -26,14 +26,11 @@ const ELECTRONVOLT = '1.602e-19';
 
 /** Names of the same dimension, one taken for another. */
 function exchanged(context: AssayContext, tree: ExpressionTree): Variant[] {
-  const printed = context.script.quantities.filter(
-    (quantity) => quantity.kind !== 'computed' && quantity.shape.kind === 'scalar',
-  );
   return everywhere(tree, (node) => {
     if (node.kind !== 'name') return [];
     const own = context.script.quantities.find((quantity) => quantity.name === node.name);
     if (own === undefined) return [];
-    return printed
+    return context.printed
       .filter((other) => other.name !== node.name && sameDimension(other.dimension, own.dimension))
       .map((other) => ({
         label: `“${other.name}” taken for “${node.name}”`,
