@@ -216,6 +216,8 @@ describe('building a paper', () => {
         { ...item, code: 'A-2', draw: 16 },
       ],
     });
+    const beyond = await engine.buildPaper({ front, items: [{ ...item, code: 'A-1', draw: 17 }] });
+    expect(beyond.draws).toMatchObject([{ exists: false }]);
     expect(built.sheet.marks).toBe(4);
     expect(built.sheet.items.map(({ number, code }) => [number, code])).toEqual([
       [1, 'A-1'],
@@ -223,9 +225,14 @@ describe('building a paper', () => {
     ]);
     expect(JSON.stringify(built.sheet.items[1])).toContain('300\u202FV');
     expect(built.scheme.items[1]?.scheme.parts[0]?.answer?.text).toBe('4.81\u202F×\u202F10⁻¹⁷\u202FJ');
-    expect(built.draws).toEqual([
-      { gridSize: 16, open: false, kept: true, compiles: true },
-      { gridSize: 16, open: false, kept: true, compiles: true },
-    ]);
+    const draw = { gridSize: 16, open: false, exists: true, kept: true, compiles: true };
+    expect(built.draws).toEqual([draw, draw]);
+    // 300 V printed; e × 300 V with a band of 2 %.
+    expect(built.facts[1]?.printed).toMatchObject([{ text: '300\u202FV', valueSI: 300 }]);
+    const [answer] = built.facts[1]?.answers ?? [];
+    expect(answer).toMatchObject({ partId: 'a', letter: 'a', text: '4.81\u202F×\u202F10⁻¹⁷\u202FJ' });
+    expect((answer?.fromSI ?? 0) / 4.8065e-17).toBeCloseTo(0.98, 4);
+    expect((answer?.toSI ?? 0) / 4.8065e-17).toBeCloseTo(1.02, 4);
+    expect(built.facts.flatMap((facts) => facts.undefinedParts)).toEqual([]);
   });
 });

@@ -53,8 +53,28 @@ export interface PaperToBuild {
 export interface BuiltPaper {
   sheet: PaperSheet;
   scheme: PaperScheme;
-  /** Of each item in order: what its draw is like. */
-  draws: { gridSize: number; open: boolean; kept: boolean; compiles: boolean }[];
+  /** Of each item in order: what its draw is like; `exists` is false for one beyond the grid. */
+  draws: { gridSize: number; open: boolean; exists: boolean; kept: boolean; compiles: boolean }[];
+  /** Of each item in order. */
+  facts: ItemFacts[];
+}
+
+/** Answers and printed values of an item at a draw, SI; dimensions as text that equal dimensions share. */
+export interface ItemFacts {
+  answers: {
+    partId: string;
+    letter: string;
+    text: string;
+    answerSI: number;
+    fromSI: number;
+    toSI: number;
+    /** Null for a bare number. */
+    dimension: string | null;
+  }[];
+  /** Values with a unit that a candidate sees. */
+  printed: { text: string; valueSI: number; dimension: string }[];
+  /** Letters of numeric parts that have no answer on this draw. */
+  undefinedParts: string[];
 }
 
 /** A draw to be chosen by chance: `chance` in [0, 1) decides. */

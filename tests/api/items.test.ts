@@ -1,5 +1,5 @@
 import { eq } from 'drizzle-orm';
-import { afterAll, beforeEach, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 
 import { auditEvents, outgoingMail, reviews as reviewTable, revisions } from '#server/db/schema/index.ts';
 import * as contracts from '#shared/contracts/items.ts';
@@ -8,20 +8,29 @@ import { itemContentSchema } from '#shared/engine/index.ts';
 import type { Client } from '#tests/support/client.ts';
 import { emptyTables } from '#tests/support/empty-tables.ts';
 import { makeTopic } from '#tests/support/factories.ts';
-import { approvedItem, gunContent, sendItem, workReview, writeItem } from '#tests/support/steps.ts';
+import {
+  approvedItem,
+  cautionedContent,
+  gunContent,
+  sendItem,
+  startEngine,
+  workReview,
+  writeItem,
+} from '#tests/support/steps.ts';
 import { openTestApp } from '#tests/support/test-app.ts';
 
 const app = openTestApp();
 const { database } = app.context;
+beforeAll(() => startEngine(app), 120_000);
 beforeEach(() => emptyTables(database));
 afterAll(() => app.close());
 
 const open = (client: Client, itemId: number) => client.call(contracts.getItem, { params: { itemId } });
 
-async function bench() {
+async function bench(content = gunContent()) {
   const { client: writer, person } = await app.signIn(['writer']);
   const topic = await makeTopic(database);
-  const made = await writeItem(writer, topic.id);
+  const made = await writeItem(writer, topic.id, content);
   return { writer, person, topic, made };
 }
 
@@ -217,12 +226,12 @@ describe('the bank’s list', () => {
   });
 
   it('tells how the last assay came out and whether it still holds', async () => {
-    const { writer, made } = await bench();
+    const { writer, made } = await bench(cautionedContent());
     const row = async () => (await writer.call(contracts.listItems)).rows[0];
     expect(await row()).toMatchObject({ assayed: 'never', worstFinding: null });
     await writer.call(contracts.assayItem, { params: { itemId: made.id } });
-    expect(await row()).toMatchObject({ assayed: 'fresh', worstFinding: 'note' });
-    expect(await codes(writer, { finding: 'note' })).toEqual([made.code]);
+    expect(await row()).toMatchObject({ assayed: 'fresh', worstFinding: 'caution' });
+    expect(await codes(writer, { finding: 'caution' })).toEqual([made.code]);
     expect(await codes(writer, { finding: 'blocker' })).toEqual([]);
     await writer.call(contracts.saveDraft, {
       params: { itemId: made.id },
@@ -383,7 +392,7 @@ describe('an approved item', () => {
 
 describe('an item whose review a person has taken on', () => {
   it('stays shut to them wherever else they could read it, until the answers are shown', async () => {
-    const { writer, made } = await bench();
+    const { writer, made } = await bench(cautionedContent());
     const { client: both } = await app.signIn(['reviewer', 'moderator']);
     const reviewId = await sendItem(writer, made.id);
     const params = { itemId: made.id };
@@ -398,16 +407,16 @@ describe('an item whose review a person has taken on', () => {
       403,
     );
     expect((await both.call(contracts.listItems)).rows[0]?.worstFinding).toBeNull();
-    expect((await both.call(contracts.listItems, { query: { finding: 'note' } })).total).toBe(0);
+    expect((await both.call(contracts.listItems, { query: { finding: 'caution' } })).total).toBe(0);
     // The claim of another reviewer changes nothing for the writer.
-    expect((await writer.call(contracts.listItems)).rows[0]?.worstFinding).toBe('note');
+    expect((await writer.call(contracts.listItems)).rows[0]?.worstFinding).toBe('caution');
   });
 
   it('opens to them once they have worked it', async () => {
-    const { writer, made } = await bench();
+    const { writer, made } = await bench(cautionedContent());
     const { client: both } = await app.signIn(['reviewer', 'moderator']);
     await workReview(both, await sendItem(writer, made.id));
     expect((await open(both, made.id)).code).toBe(made.code);
-    expect((await both.call(contracts.listItems)).rows[0]?.worstFinding).toBe('note');
+    expect((await both.call(contracts.listItems)).rows[0]?.worstFinding).toBe('caution');
   });
 });

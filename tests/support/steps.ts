@@ -2,8 +2,10 @@ import * as items from '#shared/contracts/items.ts';
 import * as papers from '#shared/contracts/papers.ts';
 import * as reviews from '#shared/contracts/reviews.ts';
 import { type ItemContent, itemContentSchema } from '#shared/engine/index.ts';
+import { AppError } from '#shared/errors/app-error.ts';
 
 import type { Client } from './client.ts';
+import type { TestApp } from './test-app.ts';
 
 /**
  * An item with two numeric parts and a written one, sound enough to be sent: electrons from a gun. Its script,
@@ -74,12 +76,24 @@ export function gunContent(given: Partial<ItemContent> = {}): ItemContent {
 const ELEMENTARY_CHARGE = 1.602176634e-19;
 const ELECTRON_MASS = 9.1093837139e-31;
 
-/** The right answers of `gunContent` for a p.d. in volts, worked out here and not by the engine. */
-export function gunAnswers(volts: number): { work: string; speed: string } {
+/** The right values of `gunContent` for a p.d. in volts, SI, worked out here and not by the engine. */
+export function gunValues(volts: number): { work: number; speed: number } {
   const work = ELEMENTARY_CHARGE * volts;
+  return { work, speed: Math.sqrt((2 * work) / ELECTRON_MASS) };
+}
+
+/** The same as a candidate writes them. */
+export function gunAnswers(volts: number): { work: string; speed: string } {
+  const { work, speed } = gunValues(volts);
+  return { work: `${work.toExponential(3)} J`, speed: `${speed.toExponential(3)} m/s` };
+}
+
+/** `gunContent` with one caution: its last part asks nothing. */
+export function cautionedContent(): ItemContent {
+  const content = gunContent();
   return {
-    work: `${work.toExponential(3)} J`,
-    speed: `${Math.sqrt((2 * work) / ELECTRON_MASS).toExponential(3)} m/s`,
+    ...content,
+    parts: content.parts.map((part) => (part.kind === 'written' ? { ...part, text: '' } : part)),
   };
 }
 
@@ -88,6 +102,22 @@ export function printedVolts(sheet: unknown): number {
   const volts = /"text":"(\d+)\u202FV"/.exec(JSON.stringify(sheet))?.[1];
   if (volts === undefined) throw new Error('The sheet prints no p.d.');
   return Number(volts);
+}
+
+/** Times that a busy machine may refuse before it is taken to be broken; each waits half a minute. */
+const STARTS = 4;
+
+/** Waits until the engine's threads run: from their sources that takes seconds, many on a busy machine. */
+export async function startEngine({ context: { engine } }: TestApp): Promise<void> {
+  const content = gunContent();
+  for (let start = 1; ; start += 1) {
+    try {
+      await Promise.all([engine.cautions(content), engine.assay(content)]);
+      return;
+    } catch (error) {
+      if (!(error instanceof AppError) || error.code !== 'busy' || start === STARTS) throw error;
+    }
+  }
 }
 
 /** A writer's new item with this content, saved once. */

@@ -1,4 +1,19 @@
-import { and, asc, count, desc, eq, isNotNull, isNull, like, ne, not, or, type SQL, sql } from 'drizzle-orm';
+import {
+  and,
+  asc,
+  count,
+  desc,
+  eq,
+  inArray,
+  isNotNull,
+  isNull,
+  like,
+  ne,
+  not,
+  or,
+  type SQL,
+  sql,
+} from 'drizzle-orm';
 import { alias } from 'drizzle-orm/mysql-core';
 
 import type { ItemQuery } from '#shared/contracts/items.ts';
@@ -214,6 +229,22 @@ export async function selectAuthorIds(connection: Connection, itemId: number): P
     .innerJoin(revisions, eq(revisions.id, revisionAuthors.revisionId))
     .where(eq(revisions.itemId, itemId));
   return rows.map((row) => row.id);
+}
+
+/** The same of many items, by item id. */
+export async function selectAuthorsOfItems(
+  connection: Connection,
+  itemIds: readonly number[],
+): Promise<Map<number, number[]>> {
+  const authors = new Map<number, number[]>();
+  if (itemIds.length === 0) return authors;
+  const rows = await connection
+    .selectDistinct({ itemId: revisions.itemId, personId: revisionAuthors.personId })
+    .from(revisionAuthors)
+    .innerJoin(revisions, eq(revisions.id, revisionAuthors.revisionId))
+    .where(inArray(revisions.itemId, [...itemIds]));
+  for (const { itemId, personId } of rows) authors.set(itemId, [...(authors.get(itemId) ?? []), personId]);
+  return authors;
 }
 
 /** Whether this person has claimed a review of the item and the answers are still hidden from them. */

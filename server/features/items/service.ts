@@ -58,6 +58,7 @@ export function readContent(revision: Pick<queries.RevisionRow, 'content'>): Ite
 }
 
 export const authorIdsOf = queries.selectAuthorIds;
+export const authorIdsOfItems = queries.selectAuthorsOfItems;
 export const isReviewerOf = queries.isReviewerOf;
 
 /** The newest assay of a revision with whether it is stale; null when there is none. */

@@ -1,94 +1,108 @@
 import type { Paper } from '#shared/contracts/papers.ts';
-import { itemContentSchema } from '#shared/engine/index.ts';
+import { ENGINE_VERSION } from '#shared/engine/index.ts';
 
 import type { AppContext } from '../../context.ts';
-import { inTransaction } from '../../db/client.ts';
+import type { Transaction } from '../../db/client.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
+import { queueMail } from '../../jobs/queue-mail.ts';
 import { bitmapsOf } from '../figures/stored-figures.ts';
-import { recordEvent } from '../records/record-event.ts';
+import { peopleInRoles, personById } from '../people/service.ts';
+import { assemble, type AssembledPaper } from './assemble.ts';
 import { nextPaperState } from './next-state.ts';
 import * as queries from './queries.ts';
 import { type SealedPaper, sealText } from './seal.ts';
-import { assemble, type AssembledPaper, findingsOf, loadPaper, lockVersion, recordView } from './service.ts';
+import { changePaper, demandVersion, findingsOf, recordPaper } from './service.ts';
 
-const blockersIn = (findings: readonly { severity: string }[]) =>
-  findings.filter((finding) => finding.severity === 'blocker').length;
+/** The paper as assembled before the transaction, with the states of its items as they are within it. */
+async function assembledNow(
+  tx: Transaction,
+  paper: queries.PaperRecord,
+  assembled: AssembledPaper,
+): Promise<AssembledPaper> {
+  // Places change only with the version, and a revision that a paper holds never changes.
+  demandVersion(assembled.paper, paper.version);
+  return { paper, places: await queries.selectPlaces(tx, paper.id), built: assembled.built };
+}
 
-/** Offers the paper for sealing; its own blockers refuse it. */
+async function blockersOf(tx: Transaction, assembled: AssembledPaper): Promise<number> {
+  return (await findingsOf(tx, assembled)).filter((finding) => finding.severity === 'blocker').length;
+}
+
+/** Offers the paper for sealing; its own blockers refuse it. Those who can confirm it get a letter. */
 export async function proposePaper(
   context: AppContext,
   actor: SignedIn,
   paperId: number,
   version: number,
 ): Promise<Paper> {
-  await inTransaction(context.database, async (tx) => {
-    demand(actor, 'paper.propose');
-    const paper = await lockVersion(context, tx, actor, paperId, version);
-    const assembled = await assemble(context, tx, paperId);
+  demand(actor, 'paper.propose');
+  const before = await assemble(context, paperId);
+  return changePaper(context, actor, paperId, version, async (tx, paper) => {
+    const assembled = await assembledNow(tx, paper, before);
     const { state, event } = nextPaperState(paper.state, {
       kind: 'propose',
       places: assembled.places.length,
-      blockers: blockersIn(await findingsOf(tx, assembled)),
+      blockers: await blockersOf(tx, assembled),
     });
     const at = context.clock();
     await queries.updatePaper(tx, paperId, at, { state, proposedById: actor.id, proposedAt: at });
-    await recordView(tx, actor, paper, event, 'Proposed');
+    const confirmers = await peopleInRoles(tx, ['setter', 'moderator']);
+    for (const person of confirmers.filter(({ id }) => id !== actor.id)) {
+      await queueMail(tx, {
+        kind: 'paperProposed',
+        person,
+        payload: { paperId, paperCode: paper.code, proposedBy: actor.name },
+        dedupeKey: `paperProposed:${paperId}:${paper.version}:${person.id}`,
+      });
+    }
+    await recordPaper(tx, actor, paper, event, 'Proposed');
   });
-  return loadPaper(context, context.database, actor, paperId);
 }
 
 /** Takes a proposed paper back to assembling, with a reason. */
-export async function returnPaper(
+export function returnPaper(
   context: AppContext,
   actor: SignedIn,
   paperId: number,
   { version, reason }: { version: number; reason: string },
 ): Promise<Paper> {
-  await inTransaction(context.database, async (tx) => {
-    demand(actor, 'paper.return');
-    const paper = await lockVersion(context, tx, actor, paperId, version);
+  demand(actor, 'paper.return');
+  return changePaper(context, actor, paperId, version, async (tx, paper) => {
     const { state, event } = nextPaperState(paper.state, { kind: 'return' });
     await queries.updatePaper(tx, paperId, context.clock(), { state, proposedById: null, proposedAt: null });
-    await recordEvent(tx, {
-      event,
-      actor,
-      subjectType: 'paper',
-      subjectId: paperId,
-      summary: `Returned ${paper.code} to assembling.`,
-      after: { reason },
-    });
+    await recordPaper(tx, actor, paper, event, 'Returned to assembling', { after: { reason } });
   });
-  return loadPaper(context, context.database, actor, paperId);
 }
 
-/** Everything that the seal freezes, bitmaps included. */
-async function sealedContent(
-  connection: Parameters<typeof bitmapsOf>[0],
-  { places, built }: AssembledPaper,
-): Promise<SealedPaper> {
-  const items: SealedPaper['items'] = [];
-  for (const place of places) {
-    const content = itemContentSchema.parse(place.content);
-    const bytes = await bitmapsOf(
-      connection,
-      content.figures.map((figure) => figure.figureId),
-    );
-    items.push({
-      code: place.itemCode,
-      revision: place.revision,
-      draw: place.draw,
+/** Everything that the seal freezes. */
+async function sealedContent(tx: Transaction, { places, built }: AssembledPaper): Promise<SealedPaper> {
+  const bitmaps = await bitmapsOf(
+    tx,
+    places.flatMap((place) => place.content.figures.map((figure) => figure.figureId)),
+  );
+  return {
+    form: 1,
+    engineVersion: ENGINE_VERSION,
+    sheet: built.sheet,
+    scheme: built.scheme,
+    items: places.map(({ itemCode, revision, draw, content }, index) => ({
+      code: itemCode,
+      revision,
+      draw,
       content,
-      figures: [...bytes]
-        .filter(([, { mediaType }]) => mediaType !== 'image/svg+xml')
-        .map(([figureId, { bytes: picture, mediaType }]) => ({
-          figureId,
-          mediaType,
-          base64: Buffer.from(picture).toString('base64'),
-        })),
-    });
-  }
-  return { form: 1, sheet: built.sheet, scheme: built.scheme, items };
+      bands: (built.facts[index]?.answers ?? []).map(({ partId, answerSI, fromSI, toSI }) => ({
+        partId,
+        answerSI,
+        fromSI,
+        toSI,
+      })),
+      bitmaps: content.figures.flatMap(({ figureId }) => {
+        const bitmap = bitmaps.get(figureId);
+        return bitmap === undefined ? [] : [{ figureId, sha256: bitmap.sha256 }];
+      }),
+    })),
+  };
 }
 
 /** The second person's confirmation: freezes all that prints and hashes it. */
@@ -98,16 +112,17 @@ export async function sealPaper(
   paperId: number,
   version: number,
 ): Promise<Paper> {
-  await inTransaction(context.database, async (tx) => {
-    const paper = await lockVersion(context, tx, actor, paperId, version);
+  const before = await assemble(context, paperId);
+  demand(actor, 'paper.seal', { proposedById: before.paper.proposedById });
+  return changePaper(context, actor, paperId, version, async (tx, paper) => {
     demand(actor, 'paper.seal', { proposedById: paper.proposedById });
-    const assembled = await assemble(context, tx, paperId);
+    const assembled = await assembledNow(tx, paper, before);
     const { state, event } = nextPaperState(paper.state, {
       kind: 'seal',
-      blockers: blockersIn(await findingsOf(tx, assembled)),
+      blockers: await blockersOf(tx, assembled),
     });
     if (paper.proposedById === null) throw new Error('A proposed paper has no proposer.');
-    const { canonical, hash } = sealText(await sealedContent(tx, assembled));
+    const { canonical, hash } = sealText(await sealedContent(tx, { ...assembled, places: before.places }));
     const at = context.clock();
     await queries.insertSeal(tx, {
       paperId,
@@ -118,32 +133,28 @@ export async function sealPaper(
       sealedAt: at,
     });
     await queries.updatePaper(tx, paperId, at, { state });
-    await recordEvent(tx, {
-      event,
-      actor,
-      subjectType: 'paper',
-      subjectId: paperId,
-      summary: `Sealed ${paper.code}.`,
-      after: { sha256: hash },
+    await queueMail(tx, {
+      kind: 'paperSealed',
+      person: await personById(tx, paper.proposedById),
+      payload: { paperId, paperCode: paper.code, confirmedBy: actor.name },
+      dedupeKey: `paperSealed:${paperId}`,
     });
+    await recordPaper(tx, actor, paper, event, 'Sealed', { after: { sha256: hash } });
   });
-  return loadPaper(context, context.database, actor, paperId);
 }
 
 /** Ends the confidentiality of a sealed paper. */
-export async function releasePaper(
+export function releasePaper(
   context: AppContext,
   actor: SignedIn,
   paperId: number,
   version: number,
 ): Promise<Paper> {
-  await inTransaction(context.database, async (tx) => {
-    demand(actor, 'paper.release');
-    const paper = await lockVersion(context, tx, actor, paperId, version);
+  demand(actor, 'paper.release');
+  return changePaper(context, actor, paperId, version, async (tx, paper) => {
     const { state, event } = nextPaperState(paper.state, { kind: 'release' });
     const at = context.clock();
     await queries.updatePaper(tx, paperId, at, { state, releasedAt: at });
-    await recordView(tx, actor, paper, event, 'Released');
+    await recordPaper(tx, actor, paper, event, 'Released');
   });
-  return loadPaper(context, context.database, actor, paperId);
 }

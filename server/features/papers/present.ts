@@ -3,7 +3,7 @@ import { abilitiesFor, type Action, type Actor } from '#shared/domain/permission
 
 import type { BuiltPaper } from '../../workers/task-types.ts';
 import type { PaperRecord, PlaceRecord, SealRecord, selectPapers } from './queries.ts';
-import { openSeal } from './seal.ts';
+import { isIntact } from './seal.ts';
 
 const PAPER_ACTIONS: readonly Action[] = [
   'paper.read',
@@ -15,17 +15,14 @@ const PAPER_ACTIONS: readonly Action[] = [
   'paper.export',
 ];
 
-export function presentPaperRow(
-  row: Awaited<ReturnType<typeof selectPapers>>[number],
-  marks: number,
-): PaperRow {
+export function presentPaperRow(row: Awaited<ReturnType<typeof selectPapers>>[number]): PaperRow {
   return {
     id: row.id,
     code: row.code,
     title: row.title,
     state: row.state,
     items: row.items,
-    marks,
+    marks: row.marks,
     targetMarks: row.targetMarks,
     createdBy: { id: row.createdById, name: row.createdByName },
     updatedAt: row.updatedAt.toISOString(),
@@ -89,7 +86,7 @@ export function presentPaper({ paper, places, built, findings, seal, actor }: Wh
         ? null
         : {
             sha256: seal.sha256,
-            intact: openSeal(seal.canonical, seal.sha256).intact,
+            intact: isIntact(seal),
             proposedBy: { id: seal.proposedById, name: seal.proposedByName },
             confirmedBy: { id: seal.confirmedById, name: seal.confirmedByName },
             sealedAt: seal.sealedAt.toISOString(),

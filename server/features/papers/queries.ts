@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, inArray, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, ne, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/mysql-core';
 
 import type { PaperDetails } from '#shared/contracts/papers.ts';
@@ -23,13 +23,18 @@ export function selectPapers(connection: Connection) {
       updatedAt: papers.updatedAt,
       createdById: people.id,
       createdByName: people.name,
-      items: count(paperPlaces.id),
-      revisionIds: sql<string | null>`group_concat(${paperPlaces.revisionId})`,
+      items:
+        sql<number>`(select count(*) from ${paperPlaces} where ${paperPlaces.paperId} = ${papers.id})`.mapWith(
+          Number,
+        ),
+      // The marks of the revisions that stand on the paper, read in the database: their contents are long.
+      marks:
+        sql<number>`(select coalesce(sum(part.marks), 0) from ${paperPlaces} join ${revisions} on ${revisions.id} = ${paperPlaces.revisionId}, json_table(${revisions.content}, '$.parts[*]' columns (marks int path '$.marks')) as part where ${paperPlaces.paperId} = ${papers.id})`.mapWith(
+          Number,
+        ),
     })
     .from(papers)
     .innerJoin(people, eq(people.id, papers.createdById))
-    .leftJoin(paperPlaces, eq(paperPlaces.paperId, papers.id))
-    .groupBy(papers.id, people.id)
     .orderBy(desc(papers.updatedAt), desc(papers.id));
 }
 
@@ -89,28 +94,15 @@ export function selectPlaces(connection: Connection, paperId: number) {
 }
 export type PlaceRecord = Awaited<ReturnType<typeof selectPlaces>>[number];
 
-/** Marks of revisions by id. */
-export async function selectMarks(
-  connection: Connection,
-  ids: readonly number[],
-): Promise<Map<number, number>> {
-  if (ids.length === 0) return new Map();
-  const rows = await connection
-    .select({ id: revisions.id, content: revisions.content })
-    .from(revisions)
-    .where(inArray(revisions.id, [...ids]));
-  return new Map(rows.map((row) => [row.id, row.content.parts.reduce((sum, part) => sum + part.marks, 0)]));
-}
-
 /** The approved revision of each item, by item id; items without one are left out. */
 export async function selectApproved(connection: Connection, itemIds: readonly number[]) {
-  if (itemIds.length === 0) return new Map<number, { revisionId: number; content: PlaceRecord['content'] }>();
+  if (itemIds.length === 0) return new Map<number, never>();
   const rows = await connection
-    .select({ itemId: items.id, revisionId: approved.id, content: approved.content })
+    .select({ itemId: items.id, itemCode: items.code, revisionId: approved.id, content: approved.content })
     .from(items)
     .innerJoin(approved, eq(approved.id, items.approvedRevisionId))
     .where(inArray(items.id, [...itemIds]));
-  return new Map(rows.map((row) => [row.itemId, { revisionId: row.revisionId, content: row.content }]));
+  return new Map(rows.map((row) => [row.itemId, row]));
 }
 
 export async function insertPaper(
@@ -188,5 +180,5 @@ export function selectOtherUses(connection: Connection, paperId: number, itemIds
     })
     .from(paperPlaces)
     .innerJoin(papers, eq(papers.id, paperPlaces.paperId))
-    .where(and(inArray(paperPlaces.itemId, [...itemIds]), sql`${papers.id} <> ${paperId}`));
+    .where(and(inArray(paperPlaces.itemId, [...itemIds]), ne(papers.id, paperId)));
 }

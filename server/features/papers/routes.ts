@@ -37,8 +37,8 @@ export function paperRoutes(context: AppContext): Route[] {
     route(contracts.releasePaper, { can: 'paper.release' }, ({ actor, params, body }) =>
       releasePaper(context, actor, params.paperId, body.version),
     ),
-    route(contracts.exportPaper, { can: 'paper.export' }, ({ actor, params }) =>
-      exportPaper(context, actor, params.paperId, params.kind),
+    route(contracts.exportPaper, { can: 'paper.export' }, ({ actor, params, signal }) =>
+      exportPaper(context, actor, params.paperId, params.kind, signal),
     ),
   ];
 }

@@ -5,9 +5,13 @@ import { paperSchemeSchema, paperSheetSchema } from '#shared/sheet/model.ts';
 
 import { sha256 } from '../../db/columns.ts';
 
-/** Everything that a seal freezes. Raise `form` when the shape changes; old forms stay readable. */
-export const sealedPaperSchema = z.object({
+/**
+ * Everything that a seal freezes: what prints (sheet with data sheet, mark scheme) and what it was made from.
+ * Raise `form` when the shape changes; old forms stay readable.
+ */
+const sealedPaperSchema = z.object({
   form: z.literal(1),
+  engineVersion: z.string(),
   sheet: paperSheetSchema,
   scheme: paperSchemeSchema,
   items: z.array(
@@ -16,8 +20,12 @@ export const sealedPaperSchema = z.object({
       revision: z.number().int(),
       draw: z.number(),
       content: itemContentSchema,
-      /** Bitmaps by their SHA-256; SVG stands in the sheet itself. */
-      figures: z.array(z.object({ figureId: z.number().int(), mediaType: z.string(), base64: z.string() })),
+      /** Accepted intervals of the numeric parts, SI. */
+      bands: z.array(
+        z.object({ partId: z.string(), answerSI: z.number(), fromSI: z.number(), toSI: z.number() }),
+      ),
+      /** Bitmaps by the SHA-256 of their bytes, which are kept for ever; SVG stands in the sheet itself. */
+      bitmaps: z.array(z.object({ figureId: z.number().int(), sha256: z.string() })),
     }),
   ),
 });
@@ -29,9 +37,13 @@ export function sealText(paper: SealedPaper): { canonical: string; hash: string 
   return { canonical, hash: sha256(canonical) };
 }
 
-/** Opens a seal; `intact` tells whether the text still has the hash that was sealed. */
-export function openSeal(canonical: string, hash: string): { paper: SealedPaper; intact: boolean } {
-  return { paper: sealedPaperSchema.parse(JSON.parse(canonical)), intact: sha256(canonical) === hash };
+/** Whether the stored text still has the hash that was sealed. */
+export const isIntact = (seal: { canonical: string; sha256: string }): boolean =>
+  sha256(seal.canonical) === seal.sha256;
+
+/** What was sealed; null when the text no longer has its hash, and then nothing of it may be trusted. */
+export function openSeal(seal: { canonical: string; sha256: string }): SealedPaper | null {
+  return isIntact(seal) ? sealedPaperSchema.parse(JSON.parse(seal.canonical)) : null;
 }
 
 /** Characters of the hash that are printed on each page. */

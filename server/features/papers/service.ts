@@ -7,77 +7,17 @@ import { type Connection, inTransaction, type Transaction } from '../../db/clien
 import { takeNumber } from '../../db/take-number.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
-import { storedFigures } from '../figures/stored-figures.ts';
+import { tellingCurrent } from '../../http/telling-current.ts';
 import { recordEvent } from '../records/record-event.ts';
-import type { BuiltPaper } from '../../workers/task-types.ts';
+import { assemble, type AssembledPaper, buildPlaces, requirePaper } from './assemble.ts';
+import { chooseDraws } from './choose-draws.ts';
 import { nextPaperState } from './next-state.ts';
 import { findInPaper } from './paper-findings.ts';
 import { presentPaper, presentPaperRow } from './present.ts';
 import * as queries from './queries.ts';
 
-/** The paper's row; throws AppError notFound. */
-export async function requirePaper(
-  connection: Connection,
-  paperId: number,
-  lock = false,
-): Promise<queries.PaperRecord> {
-  const paper = await queries.selectPaper(connection, paperId, lock);
-  if (paper === null) throw new AppError('notFound', 'There is no such paper.');
-  return paper;
-}
-
 export async function listPapers(context: AppContext) {
-  const rows = await queries.selectPapers(context.database);
-  const idsOf = (row: (typeof rows)[number]) => row.revisionIds?.split(',').map(Number) ?? [];
-  const marks = await queries.selectMarks(context.database, [...new Set(rows.flatMap(idsOf))]);
-  return {
-    papers: rows.map((row) =>
-      presentPaperRow(
-        row,
-        idsOf(row).reduce((sum, id) => sum + (marks.get(id) ?? 0), 0),
-      ),
-    ),
-  };
-}
-
-export interface AssembledPaper {
-  paper: queries.PaperRecord;
-  places: queries.PlaceRecord[];
-  built: BuiltPaper;
-}
-
-/** The paper as it would print now, worked out in the engine's threads. */
-export async function assemble(
-  context: AppContext,
-  connection: Connection,
-  paperId: number,
-  sealHash: string | null = null,
-): Promise<AssembledPaper> {
-  const paper = await requirePaper(connection, paperId);
-  const places = await queries.selectPlaces(connection, paperId);
-  const items = [];
-  for (const place of places) {
-    const content = itemContentSchema.parse(place.content);
-    items.push({
-      code: place.itemCode,
-      content,
-      draw: place.draw,
-      figures: await storedFigures(connection, content),
-    });
-  }
-  const built = await context.engine.buildPaper({
-    front: {
-      organisation: context.settings.organisation,
-      code: paper.code,
-      title: paper.title,
-      subtitle: paper.subtitle,
-      durationMinutes: paper.durationMinutes,
-      instructions: paper.instructions,
-      sealHash,
-    },
-    items,
-  });
-  return { paper, places, built };
+  return { papers: (await queries.selectPapers(context.database)).map(presentPaperRow) };
 }
 
 /** The paper's own findings at this moment. */
@@ -91,36 +31,34 @@ export async function findingsOf(connection: Connection, { paper, places, built 
 }
 
 /** The whole paper as this person may see it. */
-export async function loadPaper(
-  context: AppContext,
-  connection: Connection,
-  actor: SignedIn,
-  paperId: number,
-): Promise<Paper> {
+export async function loadPaper(context: AppContext, actor: SignedIn, paperId: number): Promise<Paper> {
   demand(actor, 'paper.read');
-  const assembled = await assemble(context, connection, paperId);
+  const { database } = context;
+  const assembled = await assemble(context, paperId);
   const sealed = assembled.paper.state === 'sealed' || assembled.paper.state === 'released';
   return presentPaper({
     ...assembled,
-    findings: sealed ? [] : await findingsOf(connection, assembled),
-    seal: await queries.selectSeal(connection, paperId),
+    findings: sealed ? [] : await findingsOf(database, assembled),
+    seal: await queries.selectSeal(database, paperId),
     actor,
   });
 }
 
 /** The paper, and the fact that this person looked at it. */
 export async function viewPaper(context: AppContext, actor: SignedIn, paperId: number): Promise<Paper> {
-  const paper = await loadPaper(context, context.database, actor, paperId);
-  await inTransaction(context.database, (tx) => recordView(tx, actor, paper, 'paper.viewed', 'Looked at'));
+  const paper = await loadPaper(context, actor, paperId);
+  await inTransaction(context.database, (tx) => recordPaper(tx, actor, paper, 'paper.viewed', 'Looked at'));
   return paper;
 }
 
-export async function recordView(
+/** Records what a person did with a paper; `did` begins the sentence that its code ends. */
+export async function recordPaper(
   tx: Transaction,
   actor: SignedIn,
   paper: { id: number; code: string },
   event: string,
   did: string,
+  change: { before?: unknown; after?: unknown } = {},
 ): Promise<void> {
   await recordEvent(tx, {
     event,
@@ -128,6 +66,7 @@ export async function recordView(
     subjectType: 'paper',
     subjectId: paper.id,
     summary: `${did} ${paper.code}.`,
+    ...change,
   });
 }
 
@@ -140,49 +79,92 @@ export async function createPaper(
     demand(actor, 'paper.create');
     const code = `P-${String(await takeNumber(tx, 'paper')).padStart(3, '0')}`;
     const id = await queries.insertPaper(tx, { ...details, code, createdById: actor.id });
-    await recordView(tx, actor, { id, code }, 'paper.created', 'Began');
+    await recordPaper(tx, actor, { id, code }, 'paper.created', 'Began');
     return id;
   });
-  return loadPaper(context, context.database, actor, paperId);
+  return loadPaper(context, actor, paperId);
 }
 
-/** Locks the paper and insists on its version; throws AppError conflict with the paper as stored. */
-export async function lockVersion(
+/** Insists that the paper is the one that the person looked at; throws AppError conflict. */
+export function demandVersion(paper: queries.PaperRecord, version: number): void {
+  if (paper.version !== version) {
+    throw new AppError('conflict', 'Somebody else changed this paper since you opened it. Compare the two.');
+  }
+}
+
+/**
+ * Runs `work` with the paper locked at `version`, then gives the paper as it is now. Throws AppError conflict,
+ * with the paper as stored, when the version is stale.
+ */
+export async function changePaper(
   context: AppContext,
-  tx: Transaction,
   actor: SignedIn,
   paperId: number,
   version: number,
-): Promise<queries.PaperRecord> {
-  const paper = await requirePaper(tx, paperId, true);
-  if (paper.version !== version) {
-    throw new AppError('conflict', 'Somebody else changed this paper since you opened it. Compare the two.', {
-      current: await loadPaper(context, tx, actor, paperId),
-    });
-  }
-  return paper;
+  work: (tx: Transaction, paper: queries.PaperRecord) => Promise<void>,
+): Promise<Paper> {
+  const current = () => loadPaper(context, actor, paperId);
+  await tellingCurrent(
+    () =>
+      inTransaction(context.database, async (tx) => {
+        const paper = await requirePaper(tx, paperId, true);
+        demandVersion(paper, version);
+        await work(tx, paper);
+      }),
+    current,
+  );
+  return current();
 }
 
-export async function saveDetails(
+export function saveDetails(
   context: AppContext,
   actor: SignedIn,
   paperId: number,
   { version, ...details }: PaperDetails & { version: number },
 ): Promise<Paper> {
-  await inTransaction(context.database, async (tx) => {
-    demand(actor, 'paper.edit');
-    const paper = await lockVersion(context, tx, actor, paperId, version);
+  demand(actor, 'paper.edit');
+  return changePaper(context, actor, paperId, version, async (tx, paper) => {
     const { event } = nextPaperState(paper.state, { kind: 'edit' });
     await queries.updatePaper(tx, paperId, context.clock(), details);
-    await recordView(tx, actor, paper, event, 'Changed the details of');
+    await recordPaper(tx, actor, paper, event, 'Changed the details of');
   });
-  return loadPaper(context, context.database, actor, paperId);
 }
 
 interface WantedPlace {
   itemId: number;
   draw: number | null;
   takeNewest: boolean;
+}
+
+/** The revision that each item brings: the one taken before, or the newest approved one. */
+async function revisionsFor(
+  context: AppContext,
+  current: readonly queries.PlaceRecord[],
+  wanted: readonly WantedPlace[],
+) {
+  const ids = wanted.map((place) => place.itemId);
+  const approved = await queries.selectApproved(context.database, ids);
+  return wanted.map((place, index) => {
+    if (ids.indexOf(place.itemId) !== index) {
+      throw new AppError('invalid', 'An item can stand on a paper only once.', {
+        fields: [{ path: `places.${index}.itemId`, message: 'This item stands on the paper already.' }],
+      });
+    }
+    const standing = current.find((candidate) => candidate.itemId === place.itemId);
+    const taken = standing === undefined || place.takeNewest ? approved.get(place.itemId) : standing;
+    if (taken === undefined) {
+      throw new AppError('invalid', `The item in place ${index + 1} has no approved revision.`, {
+        fields: [{ path: `places.${index}.itemId`, message: 'Only approved items can stand on a paper.' }],
+      });
+    }
+    return {
+      itemId: place.itemId,
+      revisionId: taken.revisionId,
+      code: taken.itemCode,
+      content: itemContentSchema.parse(taken.content),
+      draw: place.draw,
+    };
+  });
 }
 
 /**
@@ -196,45 +178,42 @@ export async function savePlaces(
   wanted: { version: number; places: readonly WantedPlace[] },
 ): Promise<Paper> {
   demand(actor, 'paper.edit');
-  const twice = wanted.places.find(
-    (place, index) => wanted.places.findIndex((other) => other.itemId === place.itemId) !== index,
+  const before = await requirePaper(context.database, paperId);
+  // Said before any work is done; asked again below with the paper locked.
+  await tellingCurrent(
+    async () => demandVersion(before, wanted.version),
+    () => loadPaper(context, actor, paperId),
   );
-  if (twice !== undefined) throw new AppError('invalid', 'An item can stand on a paper only once.');
+  const { event } = nextPaperState(before.state, { kind: 'edit' });
   const current = await queries.selectPlaces(context.database, paperId);
-  const approved = await queries.selectApproved(
-    context.database,
-    wanted.places.map((place) => place.itemId),
-  );
-  const places: { itemId: number; revisionId: number; draw: number }[] = [];
-  for (const [index, place] of wanted.places.entries()) {
-    const standing = current.find((candidate) => candidate.itemId === place.itemId);
-    const newest = approved.get(place.itemId);
-    const taken = standing === undefined || place.takeNewest ? newest : standing;
-    if (taken === undefined) {
-      throw new AppError('invalid', `The item in place ${index + 1} has no approved revision.`, {
-        fields: [{ path: `places.${index}.itemId`, message: 'Only approved items can stand on a paper.' }],
-      });
-    }
-    const chosen =
-      place.draw ??
-      (await context.engine.chooseDraw(itemContentSchema.parse(taken.content), context.random())).draw ??
-      1;
-    places.push({ itemId: place.itemId, revisionId: taken.revisionId, draw: Math.max(1, chosen) });
+  const taken = await revisionsFor(context, current, wanted.places);
+  const used = new Map<number, Set<number>>();
+  const ids = taken.map((place) => place.itemId);
+  for (const use of await queries.selectOtherUses(context.database, paperId, ids)) {
+    used.set(use.itemId, (used.get(use.itemId) ?? new Set()).add(use.draw));
   }
-  await inTransaction(context.database, async (tx) => {
-    const paper = await lockVersion(context, tx, actor, paperId, wanted.version);
-    const { event } = nextPaperState(paper.state, { kind: 'edit' });
+  const draws = await chooseDraws(context, taken, used, (chosen) =>
+    buildPlaces(
+      context,
+      before,
+      taken.map((place, index) => ({
+        itemCode: place.code,
+        content: place.content,
+        draw: chosen[index] ?? 1,
+      })),
+    ),
+  );
+  const places = taken.map(({ itemId, revisionId }, index) => ({
+    itemId,
+    revisionId,
+    draw: draws[index] ?? 1,
+  }));
+  return changePaper(context, actor, paperId, wanted.version, async (tx, paper) => {
     await queries.replacePlaces(tx, paperId, places);
     await queries.updatePaper(tx, paperId, context.clock(), {});
-    await recordEvent(tx, {
-      event,
-      actor,
-      subjectType: 'paper',
-      subjectId: paperId,
-      summary: `Changed the running order of ${paper.code}.`,
+    await recordPaper(tx, actor, paper, event, 'Changed the running order of', {
       before: { places: current.map(({ itemId, revisionId, draw }) => ({ itemId, revisionId, draw })) },
       after: { places },
     });
   });
-  return loadPaper(context, context.database, actor, paperId);
 }

@@ -36,6 +36,12 @@ export async function personById(connection: Connection, personId: number): Prom
   return person;
 }
 
+/** Active people who hold any of these roles, by name. */
+export async function peopleInRoles(connection: Connection, roles: readonly Role[]): Promise<PersonRow[]> {
+  const everyone = await selectPeople(connection, true);
+  return everyone.filter((person) => roles.some((role) => person.roles.includes(role)));
+}
+
 /** All people, by name. */
 export async function listPeople(context: AppContext): Promise<Person[]> {
   return (await selectPeople(context.database, false)).map(present);

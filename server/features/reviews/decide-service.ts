@@ -1,4 +1,4 @@
-import type { Review } from '#shared/contracts/reviews.ts';
+import type { Review, ReviewStage } from '#shared/contracts/reviews.ts';
 import { isNumericPart } from '#shared/engine/index.ts';
 import { AppError } from '#shared/errors/app-error.ts';
 
@@ -12,12 +12,23 @@ import { newestAssayOf, requireItem } from '../items/service.ts';
 import { personById } from '../people/service.ts';
 import { recordEvent } from '../records/record-event.ts';
 import * as queries from './queries.ts';
-import { loadReview, requireReview } from './service.ts';
+import { currentWorkings, getReview, requireReview } from './service.ts';
 
 interface Decision {
   decision: 'approved' | 'returned';
   reason: string;
   acceptedCautions: Record<string, string>;
+}
+
+/** An item can come back as soon as somebody works it: one that cannot be worked must. */
+function demandDecidable(stage: ReviewStage, decision: Decision['decision']): void {
+  if (stage === 'revealed' || (stage === 'working' && decision === 'returned')) return;
+  throw new AppError(
+    'notPossible',
+    stage === 'decided'
+      ? 'This review is over.'
+      : 'Work every numeric part and look at the answers before you decide.',
+  );
 }
 
 /**
@@ -37,18 +48,23 @@ export async function decideReview(
       fields: [{ path: 'reason', message: 'Say what the writer should change.' }],
     });
   }
+  demandDecidable(before.row.stage, wanted.decision);
   if (wanted.decision === 'approved') await freshAssay(context, actor, before.row.itemId);
   await inTransaction(context.database, async (tx) => {
+    // The item first, as everything else that changes its state locks it, so that no two wait for each other.
+    const item = await requireItem(tx, before.row.itemId, true);
     const { row, subject, content } = await requireReview(tx, reviewId, true);
     demand(actor, 'review.decide', subject);
-    if (row.stage !== 'revealed') {
-      throw new AppError('notPossible', 'Work every numeric part and look at the answers before you decide.');
-    }
-    const item = await requireItem(tx, row.itemId, true);
-    const reasons = { ...content.acceptedCautions, ...wanted.acceptedCautions };
+    demandDecidable(row.stage, wanted.decision);
+    const accepted = Object.fromEntries(
+      Object.entries(wanted.acceptedCautions)
+        .map(([key, reason]) => [key, reason.trim()] as const)
+        .filter(([, reason]) => reason !== ''),
+    );
+    const reasons: Record<string, string> = { ...content.acceptedCautions, ...accepted };
     const assay = await newestAssayOf(tx, row.revisionId);
     const findings = assay?.report.findings ?? [];
-    const workings = await queries.selectWorkings(tx, reviewId);
+    const workings = await currentWorkings(tx, row);
     const newest = content.parts
       .filter(isNumericPart)
       .map((part) => workings.filter((one) => one.partId === part.id).at(-1));
@@ -75,7 +91,7 @@ export async function decideReview(
       stage: 'decided',
       decision: wanted.decision,
       decisionReason: wanted.reason,
-      acceptedCautions: wanted.acceptedCautions,
+      acceptedCautions: accepted,
       decidedAt: at,
     });
     const writer = await personById(tx, row.requestedById);
@@ -91,8 +107,8 @@ export async function decideReview(
       subjectType: 'item',
       subjectId: item.id,
       summary: `${wanted.decision === 'approved' ? 'Approved' : 'Returned'} ${row.itemCode} revision ${row.revision}.`,
-      after: { reviewId, reason: wanted.reason, acceptedCautions: wanted.acceptedCautions },
+      after: { reviewId, reason: wanted.reason, acceptedCautions: accepted },
     });
   });
-  return loadReview(context, context.database, actor, reviewId);
+  return getReview(context, actor, reviewId);
 }

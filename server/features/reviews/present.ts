@@ -33,10 +33,11 @@ export function presentReviewRow(row: ReviewRecord, actor: Actor, subject: Subje
   };
 }
 
-export function presentWorking(row: WorkingRow): Working {
+/** `attempt` counts the tries of the present claim. */
+function presentWorking(row: WorkingRow, attempt: number): Working {
   return {
     partId: row.partId,
-    attempt: row.attempt,
+    attempt,
     text: row.text,
     agrees: row.agrees,
     remark: row.remark,
@@ -83,7 +84,12 @@ export function presentReview(whole: WholeReview): Review {
               ? [{ partId: part.id, letter: partLetter(index), unit: part.answer.unit }]
               : [],
           ),
-    workings: workings.map(presentWorking),
+    workings: workings.map((working, index) =>
+      presentWorking(
+        working,
+        workings.slice(0, index + 1).filter((one) => one.partId === working.partId).length,
+      ),
+    ),
     reveal,
     comments: comments.map(presentComment),
     decisionReason: row.decisionReason,

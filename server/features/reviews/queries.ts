@@ -41,6 +41,8 @@ const columns = {
   note: reviews.note,
   dueOn: reviews.dueOn,
   createdAt: reviews.createdAt,
+  claimedAt: reviews.claimedAt,
+  revealedAt: reviews.revealedAt,
   decidedAt: reviews.decidedAt,
 };
 
@@ -129,6 +131,7 @@ export async function insertWorking(
     agrees: boolean;
     verdict: Verdict;
     remark: string;
+    createdAt: Date;
   },
 ): Promise<void> {
   await tx.insert(independentWorkings).values(working);

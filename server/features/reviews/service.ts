@@ -1,7 +1,6 @@
-import type { Review } from '#shared/contracts/reviews.ts';
-import { MAX_ATTEMPTS } from '#shared/contracts/reviews.ts';
+import { MAX_ATTEMPTS, type Review } from '#shared/contracts/reviews.ts';
 import type { Subject } from '#shared/domain/permissions.ts';
-import { isNumericPart, type ItemContent } from '#shared/engine/index.ts';
+import { isNumericPart, type ItemContent, partLetter } from '#shared/engine/index.ts';
 import { AppError } from '#shared/errors/app-error.ts';
 
 import type { AppContext } from '../../context.ts';
@@ -11,6 +10,7 @@ import type { SignedIn } from '../../http/signed-in.ts';
 import { storedFigures } from '../figures/stored-figures.ts';
 import {
   authorIdsOf,
+  authorIdsOfItems,
   newestAssayOf,
   previousApproved,
   readContent,
@@ -48,35 +48,49 @@ export async function requireReview(
 
 export async function listReviews(context: AppContext, actor: SignedIn, scope: 'open' | 'mine' | 'decided') {
   const rows = await queries.selectReviewList(context.database, scope, actor.id);
+  const authors = await authorIdsOfItems(
+    context.database,
+    rows.map((row) => row.itemId),
+  );
   return {
     reviews: rows.map((row) =>
-      presentReviewRow(row, actor, { ownerId: row.ownerId, reviewerId: row.reviewerId }),
+      presentReviewRow(row, actor, {
+        ownerId: row.ownerId,
+        authorIds: authors.get(row.itemId) ?? [],
+        reviewerId: row.reviewerId,
+      }),
     ),
   };
 }
 
-/** Whether this person sees the answers: the reviewer from the reveal on, the writers always. */
+/**
+ * Whether this person sees the answers: the writers always, everyone else once the reviewer has had them shown.
+ * A review that ended before that never shows them, since the same person may work the next revision.
+ */
 function seesAnswers({ row, subject }: OpenReview, actor: SignedIn): boolean {
   const wrote = subject.ownerId === actor.id || (subject.authorIds?.includes(actor.id) ?? false);
-  return wrote || row.stage === 'revealed' || row.stage === 'decided';
+  return wrote || row.revealedAt !== null;
+}
+
+/** Tries of the present claim; those of somebody who gave the review back were at another draw. */
+export async function currentWorkings(connection: Connection, row: queries.ReviewRecord) {
+  const all = await queries.selectWorkings(connection, row.id);
+  const { claimedAt } = row;
+  return claimedAt === null ? [] : all.filter((working) => working.createdAt >= claimedAt);
 }
 
 /** The review as this person may see it at its stage. */
-export async function loadReview(
-  context: AppContext,
-  connection: Connection,
-  actor: SignedIn,
-  reviewId: number,
-): Promise<Review> {
-  const open = await requireReview(connection, reviewId);
+export async function getReview(context: AppContext, actor: SignedIn, reviewId: number): Promise<Review> {
+  const { database } = context;
+  const open = await requireReview(database, reviewId);
   const { row, subject, content } = open;
   demand(actor, 'review.read', subject);
   const answers = seesAnswers(open, actor);
   const maySeeSheet = answers || (row.stage === 'working' && row.reviewerId === actor.id);
   const view = maySeeSheet
-    ? await context.engine.viewDraw(content, row.draw, await storedFigures(connection, content))
+    ? await context.engine.viewDraw(content, row.draw, await storedFigures(database, content))
     : null;
-  const assay = answers ? await newestAssayOf(connection, row.revisionId) : null;
+  const assay = answers ? await newestAssayOf(database, row.revisionId) : null;
   const reveal =
     answers && view !== null && assay !== null
       ? {
@@ -84,7 +98,7 @@ export async function loadReview(
           scheme: view.scheme,
           report: assay.report,
           assayStale: assay.stale,
-          previous: await previousApproved(connection, row.itemId, row.revision),
+          previous: await previousApproved(database, row.itemId, row.revision),
         }
       : null;
   return presentReview({
@@ -93,14 +107,11 @@ export async function loadReview(
     subject,
     content,
     sheet: view?.sheet ?? null,
-    workings: await queries.selectWorkings(connection, reviewId),
-    comments: await queries.selectComments(connection, reviewId),
+    workings: await currentWorkings(database, row),
+    comments: await queries.selectComments(database, reviewId),
     reveal,
   });
 }
-
-export const getReview = (context: AppContext, actor: SignedIn, reviewId: number): Promise<Review> =>
-  loadReview(context, context.database, actor, reviewId);
 
 function demandStage(row: queries.ReviewRecord, stage: queries.ReviewRecord['stage'], refusal: string): void {
   if (row.stage !== stage) throw new AppError('notPossible', refusal);
@@ -114,12 +125,13 @@ async function change(
   work: (tx: Transaction, open: OpenReview) => Promise<void>,
 ): Promise<Review> {
   await inTransaction(context.database, async (tx) => work(tx, await requireReview(tx, reviewId, true)));
-  return loadReview(context, context.database, actor, reviewId);
+  return getReview(context, actor, reviewId);
 }
 
 /** Takes a waiting review on; the draw to work is chosen by chance then, by nobody who works it. */
 export async function claimReview(context: AppContext, actor: SignedIn, reviewId: number): Promise<Review> {
   const before = await requireReview(context.database, reviewId);
+  demand(actor, 'review.claim', before.subject);
   const chosen = await context.engine.chooseDraw(before.content, context.random());
   return change(context, actor, reviewId, async (tx, { row, subject }) => {
     demand(actor, 'review.claim', subject);
@@ -169,7 +181,10 @@ function requireNumericPart(content: ItemContent, partId: string): void {
 const newestOf = (workings: readonly queries.WorkingRow[], partId: string) =>
   workings.filter((working) => working.partId === partId).at(-1);
 
-/** Compares the reviewer's own answer with the band; says whether it agrees and nothing more. */
+/**
+ * Compares the reviewer's own answer with the band; says whether it agrees and nothing more. What cannot be
+ * compared at all is AppError invalid and takes no try.
+ */
 export async function addWorking(
   context: AppContext,
   actor: SignedIn,
@@ -178,6 +193,11 @@ export async function addWorking(
 ): Promise<Review> {
   const before = await requireReview(context.database, reviewId);
   demand(actor, 'review.work', before.subject);
+  demandStage(
+    before.row,
+    'working',
+    'Workings are given after the review is claimed and before the answers are shown.',
+  );
   requireNumericPart(before.content, wanted.partId);
   const marked = await context.engine.markWorking({
     content: before.content,
@@ -185,27 +205,34 @@ export async function addWorking(
     draw: before.row.draw,
     text: wanted.text,
   });
+  if (!marked.comparable) {
+    throw new AppError('invalid', marked.remark, { fields: [{ path: 'text', message: marked.remark }] });
+  }
   return change(context, actor, reviewId, async (tx, { row, subject }) => {
     demand(actor, 'review.work', subject);
     demandStage(row, 'working', 'Workings are given before the answers are shown.');
-    if (row.draw !== before.row.draw) {
-      throw new AppError('conflict', 'This review was claimed anew meanwhile. Look at it again.');
+    if (row.claimedAt?.getTime() !== before.row.claimedAt?.getTime()) {
+      throw new AppError('notPossible', 'This review was claimed anew meanwhile. Look at it again.');
     }
-    const workings = await queries.selectWorkings(tx, reviewId);
-    const newest = newestOf(workings, wanted.partId);
-    if (newest?.agrees === true)
+    const tries = (await currentWorkings(tx, row)).filter((working) => working.partId === wanted.partId);
+    if (tries.at(-1)?.agrees === true) {
       throw new AppError('notPossible', 'Your working of this part agrees already.');
-    if ((newest?.attempt ?? 0) >= MAX_ATTEMPTS) {
-      throw new AppError('notPossible', 'Both tries at this part are used. Hold to your working, or go on.');
     }
+    if (tries.length >= MAX_ATTEMPTS) {
+      throw new AppError('notPossible', 'Both tries at this part are used. You can hold to your working.');
+    }
+    const earlier = (await queries.selectWorkings(tx, reviewId)).filter(
+      (working) => working.partId === wanted.partId,
+    );
     await queries.insertWorking(tx, {
       reviewId,
       partId: wanted.partId,
-      attempt: (newest?.attempt ?? 0) + 1,
+      attempt: earlier.length + 1,
       text: wanted.text,
       agrees: marked.agrees,
       verdict: marked.verdict,
       remark: marked.remark.slice(0, 400),
+      createdAt: context.clock(),
     });
     await recordEvent(tx, {
       event: 'review.worked',
@@ -217,7 +244,7 @@ export async function addWorking(
   });
 }
 
-/** Holds to one's own working against the checker. */
+/** Holds to one's own working against the checker, after the last try. */
 export function disputePart(
   context: AppContext,
   actor: SignedIn,
@@ -227,12 +254,16 @@ export function disputePart(
   return change(context, actor, reviewId, async (tx, { row, subject }) => {
     demand(actor, 'review.work', subject);
     demandStage(row, 'working', 'Say so before the answers are shown.');
-    const newest = newestOf(await queries.selectWorkings(tx, reviewId), partId);
+    const tries = (await currentWorkings(tx, row)).filter((working) => working.partId === partId);
+    const newest = tries.at(-1);
     if (newest === undefined || newest.agrees) {
       throw new AppError(
         'notPossible',
         'Give your working first; only one that does not agree can be held to.',
       );
+    }
+    if (tries.length < MAX_ATTEMPTS) {
+      throw new AppError('notPossible', 'Try this part once more before you hold to your working.');
     }
     await queries.updateWorking(tx, newest.id, { disputed: true });
     await recordEvent(tx, {
@@ -255,7 +286,7 @@ export function settlePart(
   return change(context, actor, reviewId, async (tx, { row, subject }) => {
     demand(actor, 'review.work', subject);
     demandStage(row, 'revealed', 'A dispute is settled after the answers are shown and before the decision.');
-    const newest = newestOf(await queries.selectWorkings(tx, reviewId), wanted.partId);
+    const newest = newestOf(await currentWorkings(tx, row), wanted.partId);
     if (newest === undefined || newest.agrees)
       throw new AppError('notPossible', 'There is nothing to settle in this part.');
     await queries.updateWorking(tx, newest.id, { settledReason: wanted.reason });
@@ -270,21 +301,21 @@ export function settlePart(
   });
 }
 
-/** Shows the answers, once every numeric part has a working that agrees or is held to, or both tries are used. */
+/** Shows the answers, once every numeric part has a working that agrees or is held to. */
 export function revealReview(context: AppContext, actor: SignedIn, reviewId: number): Promise<Review> {
   return change(context, actor, reviewId, async (tx, { row, subject, content }) => {
     demand(actor, 'review.work', subject);
     demandStage(row, 'working', 'The answers are shown already, or the review is not claimed yet.');
-    const workings = await queries.selectWorkings(tx, reviewId);
-    const open = content.parts.filter((part) => {
-      if (!isNumericPart(part)) return false;
+    const workings = await currentWorkings(tx, row);
+    const open = content.parts.flatMap((part, index) => {
+      if (!isNumericPart(part)) return [];
       const newest = newestOf(workings, part.id);
-      return newest === undefined || !(newest.agrees || newest.disputed || newest.attempt >= MAX_ATTEMPTS);
+      return newest?.agrees === true || newest?.disputed === true ? [] : [`(${partLetter(index)})`];
     });
     if (open.length > 0) {
       throw new AppError(
         'notPossible',
-        `${open.length === 1 ? 'One numeric part still waits' : `${open.length} numeric parts still wait`} for your working.`,
+        `${open.length === 1 ? `Part ${open.join()} has` : `Parts ${open.join(', ')} have`} no working yet that agrees or that you hold to.`,
       );
     }
     await queries.updateReview(tx, reviewId, { stage: 'revealed', revealedAt: context.clock() });
@@ -298,14 +329,21 @@ export function revealReview(context: AppContext, actor: SignedIn, reviewId: num
   });
 }
 
+/** Adds a comment, on a part or on the whole. Nobody can change or remove it. */
 export function addComment(
   context: AppContext,
   actor: SignedIn,
   reviewId: number,
   wanted: { anchor: string; text: string },
 ): Promise<Review> {
-  return change(context, actor, reviewId, async (tx, { row, subject }) => {
+  return change(context, actor, reviewId, async (tx, { row, subject, content }) => {
     demand(actor, 'review.comment', subject);
+    const anchors = ['', 'stem', 'script', ...content.parts.map((part) => part.id)];
+    if (!anchors.includes(wanted.anchor)) {
+      throw new AppError('invalid', 'This comment points at a part that the item does not have.', {
+        fields: [{ path: 'anchor', message: 'Choose a part, the stem, the script or the whole item.' }],
+      });
+    }
     await queries.insertComment(tx, { reviewId, revisionId: row.revisionId, authorId: actor.id, ...wanted });
     await recordEvent(tx, {
       event: 'review.commented',
