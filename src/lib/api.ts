@@ -145,13 +145,19 @@ export async function sendFile(
   return response.json();
 }
 
+/** The file name in a Content-Disposition header, quoted or not (RFC 6266); "export" where there is none. */
+export function fileNameOf(header: string): string {
+  const [, quoted, plain] = /filename=(?:"([^"]+)"|([^\s;"]+))/.exec(header) ?? [];
+  return quoted ?? plain ?? 'export';
+}
+
 /** Fetches a file and hands it to the browser to save under the name that the server gives it. */
 export async function download(endpoint: Endpoint, params: unknown, signal?: AbortSignal): Promise<void> {
   const response = await send(pathOf(endpoint, params, {}), {
     method: endpoint.method,
     ...(signal === undefined ? {} : { signal }),
   });
-  const name = /filename="([^"]+)"/.exec(response.headers.get('content-disposition') ?? '')?.[1] ?? 'export';
+  const name = fileNameOf(response.headers.get('content-disposition') ?? '');
   const address = URL.createObjectURL(await response.blob());
   const link = document.createElement('a');
   link.href = address;

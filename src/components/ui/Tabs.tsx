@@ -30,7 +30,7 @@ export function Tabs<View extends string>({ label, views, view, onView, children
           </Primitive.Trigger>
         ))}
       </Primitive.List>
-      <Primitive.Content value={view} className="grid gap-6">
+      <Primitive.Content value={view} className="grid grid-cols-[minmax(0,1fr)] gap-6">
         {children}
       </Primitive.Content>
     </Primitive.Root>

@@ -37,7 +37,7 @@ export function Bank({ mayWrite }: { mayWrite: boolean }) {
   );
   const total = page.data?.total ?? 0;
   return (
-    <div className="grid gap-5">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
       <div className="flex flex-wrap items-baseline justify-between gap-4">
         <p className="text-muted" role="status">
           {page.isSuccess ? countOf(total, 'item') : ''}

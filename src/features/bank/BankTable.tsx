@@ -33,12 +33,15 @@ const columns = [
   column.accessor('code', {
     header: 'Code',
     cell: (cell) => (
-      <Link className="link font-mono text-sm" to={`/items/${cell.row.original.id}`}>
+      <Link className="link whitespace-nowrap font-mono text-sm" to={`/items/${cell.row.original.id}`}>
         {cell.getValue()}
       </Link>
     ),
   }),
-  column.accessor('title', { header: 'Title' }),
+  column.accessor('title', {
+    header: 'Title',
+    cell: (cell) => <span className="block min-w-48">{cell.getValue()}</span>,
+  }),
   column.accessor((row) => row.topic.name, { id: 'topic', header: 'Topic' }),
   column.accessor((row) => ITEM_STATE_NAMES[row.state], { id: 'state', header: 'State' }),
   column.accessor((row) => row.owner.name, { id: 'owner', header: 'Owner' }),

@@ -93,7 +93,7 @@ export function PaperDesk(props: PaperDeskProps) {
   };
 
   return (
-    <div className="grid gap-6">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-6">
       <div className="flex flex-wrap items-baseline gap-x-6 gap-y-2">
         <span>
           {PAPER_STATE_NAMES[paper.state]}
@@ -118,7 +118,7 @@ export function PaperDesk(props: PaperDeskProps) {
       )}
       <Tabs label="Views of the paper" views={VIEWS} view={view} onView={setView}>
         {view === 'order' ? (
-          <div className="grid gap-10 xl:grid-cols-[minmax(0,1fr)_24rem]">
+          <div className="grid grid-cols-[minmax(0,1fr)] gap-10 xl:grid-cols-[minmax(0,1fr)_24rem]">
             <div>
               <RunningOrder
                 paper={paper}

@@ -40,7 +40,7 @@ export function Records() {
       return next;
     });
   return (
-    <div className="grid gap-5">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
       <div className="flex flex-wrap items-end gap-4">
         <label>
           <span className="field-label">Person</span>
