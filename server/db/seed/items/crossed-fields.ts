@@ -87,7 +87,6 @@ Bdouble = 2 * B`,
     topic: 'CF',
     life: 'waiting',
     remark: 'Values chosen so that the speed stays below a tenth of the speed of light.',
-    figures: [crossedFigure],
     content: {
       title: 'Specific charge from a balanced beam',
       stem: 'Electrons are accelerated from rest through a p.d. of {{Va}}. The beam then passes undeflected through crossed fields: an electric field of strength {{E}} and a magnetic field of flux density {{B}}.',
