@@ -15,7 +15,9 @@ import { BenchWorkings } from './BenchWorkings.tsx';
 import { FaceChoice } from './FaceChoice.tsx';
 import { useLiveCheck } from './check/use-live-check.ts';
 import { ConflictView } from './conflict/ConflictView.tsx';
+import { RemovedNotice } from './draft/RemovedNotice.tsx';
 import { useDraft } from './draft/use-draft.ts';
+import { useDrawKeys } from './draws/use-draw-keys.ts';
 import { DrawBar } from './draws/DrawBar.tsx';
 import { drawAfter, type DrawMove } from './draws/draw-navigation.ts';
 import type { ScriptEditorHandle } from './editor/ScriptEditor.tsx';
@@ -98,6 +100,7 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
     theirs === null &&
     autosave.state.phase !== 'saving' &&
     item.revision.version > autosave.state.version;
+  const broken = check.view?.diagnostics.some((one) => one.field === '' && one.severity === 'error') ?? false;
   const shownDraw = draw ?? check.view?.draw ?? null;
 
   const renew = async (next: Item): Promise<void> => {
@@ -109,6 +112,7 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
     const next = drawAfter(content.script, shownDraw, step, Math.random);
     if (next !== null) onDraw(next);
   };
+  useDrawKeys(move);
   const visit = (target: FindingTarget): void => {
     switch (target.kind) {
       case 'script':
@@ -228,7 +232,7 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
           <div className="bench-sheet">
             <DrawBar
               draw={shownDraw}
-              kept={check.view?.kept ?? true}
+              kept={(check.view?.kept ?? true) || broken}
               gridSize={check.view?.gridSize ?? 1}
               open={check.view?.open ?? false}
               worstDraw={report === null ? null : worstDrawOf(report.findings)}
@@ -256,6 +260,7 @@ export function Bench({ item, personId, draw, onDraw, slots }: BenchProps) {
           </div>
         </div>
       )}
+      {!readOnly && <RemovedNotice draft={draft} />}
     </div>
   );
 }

@@ -1,4 +1,4 @@
-import { useState, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
 
 import { partLetter, type AssayReport, type ItemContent } from '#shared/engine/index.ts';
 import type { DrawView } from '#shared/contracts/checking.ts';
@@ -6,6 +6,7 @@ import type { ItemSheet } from '#shared/sheet/model.ts';
 import type { Topic } from '#shared/contracts/topics.ts';
 import { BenchStem } from './BenchStem.tsx';
 import type { DraftEditor } from './draft/use-draft.ts';
+import { EditorPlace } from './EditorPlace.tsx';
 import { FiguresEditor } from './figures/FiguresEditor.tsx';
 import { AddPart } from './parts/PartTools.tsx';
 import { PartPlace } from './parts/PartPlace.tsx';
@@ -42,7 +43,6 @@ function sheetOf(view: DrawView | null, content: ItemContent): ItemSheet {
 /** The sheet as the candidate will see it, with scale strips and editors in place. */
 export function BenchSheet(props: BenchSheetProps): ReactNode {
   const { draft, content, view, report, readOnly, editing, onEditing } = props;
-  const [removed, setRemoved] = useState<string | null>(null);
   const rows = view?.quantities ?? [];
   const diagnostics = view?.diagnostics ?? [];
   const stemOpen = editing === 'stem';
@@ -60,7 +60,7 @@ export function BenchSheet(props: BenchSheetProps): ReactNode {
         </button>
       </p>
       {stemOpen && (
-        <section aria-label="Editing title, stem and figures" className="bench-editor">
+        <EditorPlace label="Editing title, stem and figures">
           <BenchStem
             draft={draft}
             content={content}
@@ -77,7 +77,7 @@ export function BenchSheet(props: BenchSheetProps): ReactNode {
             onChange={draft.changeFigure}
             onRemove={(index) => draft.changeFigure(index, null, null)}
           />
-        </section>
+        </EditorPlace>
       )}
     </div>
   );
@@ -97,7 +97,6 @@ export function BenchSheet(props: BenchSheetProps): ReactNode {
             readOnly={readOnly}
             editing={editing === partId}
             onEdit={() => onEditing(editing === partId ? null : partId)}
-            onRemoved={setRemoved}
             onVisitDraw={props.onVisitDraw}
             renderScale={props.slots.scale}
           />
@@ -107,25 +106,9 @@ export function BenchSheet(props: BenchSheetProps): ReactNode {
         <div className="mt-4 grid gap-2">
           <AddPart
             onAdd={(kind) => {
-              setRemoved(null);
               onEditing(draft.addPart(kind));
             }}
           />
-          {removed !== null && (
-            <p role="status">
-              Part ({removed}) is removed.{' '}
-              <button
-                type="button"
-                className="link"
-                onClick={() => {
-                  draft.undo();
-                  setRemoved(null);
-                }}
-              >
-                Bring it back
-              </button>
-            </p>
-          )}
         </div>
       )}
     </div>

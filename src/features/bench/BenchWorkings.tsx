@@ -5,6 +5,7 @@ import type { DrawView } from '#shared/contracts/checking.ts';
 import type { DraftEditor } from './draft/use-draft.ts';
 import type { ScriptEditorHandle } from './editor/ScriptEditor.tsx';
 import { underlines } from './editor/script-lint.ts';
+import { Sentence } from '#src/components/ui/Sentence.tsx';
 import { FindingsList } from './findings/FindingsList.tsx';
 import type { FindingTarget } from './findings/group-findings.ts';
 import { QuantitiesTable } from './quantities/QuantitiesTable.tsx';
@@ -66,7 +67,7 @@ export function BenchWorkings(props: BenchWorkingsProps) {
               </button>
               <span className={mistake.severity === 'error' ? 'text-lead' : 'text-brass'}>
                 {' '}
-                {mistake.message}
+                <Sentence text={mistake.message} />
               </span>
             </li>
           ))}

@@ -4,6 +4,7 @@ import { z } from 'zod';
 
 import type { ReviewComment } from '#shared/contracts/reviews.ts';
 import { formatDayAndTime } from '#src/lib/format.ts';
+import { unsaved } from '#src/components/ui/unsaved.ts';
 import { sentenceOf } from '#src/lib/api.ts';
 
 const commentForm = z.object({
@@ -69,7 +70,7 @@ export function CommentsPanel({ comments, anchors, canComment, onComment }: Comm
       )}
       {lost.length > 0 && group('a part that is no longer there', lost)}
       {canComment && (
-        <form className="grid gap-2" onSubmit={(event) => void submit(event)}>
+        <form {...unsaved(formState.isDirty)} className="grid gap-2" onSubmit={(event) => void submit(event)}>
           <label>
             <span className="field-label">About</span>
             <select className="field" {...register('anchor')}>

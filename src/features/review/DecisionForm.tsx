@@ -3,7 +3,9 @@ import { useForm, useWatch } from 'react-hook-form';
 import { z } from 'zod';
 
 import type { Review } from '#shared/contracts/reviews.ts';
+import { unsaved } from '#src/components/ui/unsaved.ts';
 import { sentenceOf } from '#src/lib/api.ts';
+import { Sentence } from '#src/components/ui/Sentence.tsx';
 import { approvalHindrances, openCautions } from './review-progress.ts';
 
 const decisionForm = z
@@ -64,13 +66,15 @@ export function DecisionForm({ review, onDecide }: DecisionFormProps) {
   const { errors } = formState;
   const problem = errors.root?.message ?? errors.decision?.message;
   return (
-    <form className="grid gap-4" onSubmit={(event) => void submit(event)}>
+    <form {...unsaved(formState.isDirty)} className="grid gap-4" onSubmit={(event) => void submit(event)}>
       {cautions.length > 0 && (
         <fieldset className="grid gap-3">
           <legend className="font-semibold">Cautions that may stand</legend>
           {cautions.map((caution, index) => (
             <label key={caution.key}>
-              <span className="block">{caution.statement}</span>
+              <span className="block">
+                <Sentence text={caution.statement} />
+              </span>
               <input
                 className="field w-full"
                 placeholder="why it may stand"

@@ -1,4 +1,5 @@
 import { partLetter, SEVERITIES, type ItemContent } from '#shared/engine/index.ts';
+import { Sentence } from '#src/components/ui/Sentence.tsx';
 import type { AssayReport, Severity } from '#shared/engine/index.ts';
 
 const NAMES: Readonly<Record<Severity, { title: string; sign: string; tone: string }>> = {
@@ -28,9 +29,13 @@ export function ReviewFindings({ report, content }: { report: AssayReport; conte
             <div>
               <p>
                 <span className={`font-semibold ${tone}`}>{title}</span>
-                {where === null ? '' : `, ${where}`}: {finding.statement}
+                {where === null ? '' : `, ${where}`}: <Sentence text={finding.statement} />
               </p>
-              {finding.cure !== '' && <p className="text-sm text-muted">{finding.cure}</p>}
+              {finding.cure !== '' && (
+                <p className="text-sm text-muted">
+                  <Sentence text={finding.cure} />
+                </p>
+              )}
               {reason !== undefined && reason !== '' && (
                 <p className="text-sm">The writer lets this stand: {reason}</p>
               )}

@@ -1,6 +1,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
+import { unsaved } from '#src/components/ui/unsaved.ts';
 import { sentenceOf } from '#src/lib/api.ts';
 
 import type { PartProgress } from './review-progress.ts';
@@ -31,7 +32,7 @@ export function SettlementForm({ part, onSettle }: SettlementFormProps) {
     }
   });
   return (
-    <form className="grid gap-1" onSubmit={(event) => void submit(event)}>
+    <form {...unsaved(formState.isDirty)} className="grid gap-1" onSubmit={(event) => void submit(event)}>
       <label htmlFor={id}>
         Your working of ({part.letter}) did not agree. If you now agree with the answer, say what settled it;
         otherwise return the item.

@@ -1,6 +1,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
+import { unsaved } from '#src/components/ui/unsaved.ts';
 import { sentenceOf } from '#src/lib/api.ts';
 
 import type { PartProgress } from './review-progress.ts';
@@ -61,7 +62,11 @@ export function WorkingForm({ part, busy, onTry, onDispute }: WorkingFormProps) 
         ))}
       </ol>
       {open ? (
-        <form onSubmit={(event) => void submit(event)} className="mt-1 grid gap-1">
+        <form
+          {...unsaved(formState.isDirty)}
+          onSubmit={(event) => void submit(event)}
+          className="mt-1 grid gap-1"
+        >
           <label htmlFor={id} className="field-label">
             My answer, with its unit
           </label>

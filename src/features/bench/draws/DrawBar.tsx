@@ -21,12 +21,12 @@ export function DrawBar({ draw, kept, gridSize, open, worstDraw, onMove, onDraw 
   useEffect(() => setTyped(null), [draw]);
   const reading = typed === null ? null : readDrawNumber(typed, gridSize, open);
   const wrong = reading !== null && !reading.ok && typed !== '' ? reading.reason : null;
-  const step = (move: DrawMove, name: string, sign: string) => (
+  const step = (move: DrawMove, name: string, sign: string, key = '') => (
     <button
       type="button"
       className="step"
       aria-label={`${name} draw`}
-      title={`${name} draw`}
+      title={`${name} draw${key === '' ? '' : `, key ${key}`}`}
       onClick={() => onMove(move)}
     >
       {sign}
@@ -35,7 +35,7 @@ export function DrawBar({ draw, kept, gridSize, open, worstDraw, onMove, onDraw 
   return (
     <div role="group" aria-label="Draw" className="bench-draws flex flex-wrap items-center gap-x-2 gap-y-1">
       {step('first', 'First', '|‹')}
-      {step('previous', 'Previous', '‹')}
+      {step('previous', 'Previous', '‹', '[')}
       <form
         className="inline-flex items-center gap-1"
         onSubmit={(event) => {
@@ -62,7 +62,7 @@ export function DrawBar({ draw, kept, gridSize, open, worstDraw, onMove, onDraw 
           {open ? 'without end' : `of ${gridSize.toLocaleString('en-GB')}`}
         </span>
       </form>
-      {step('next', 'Next', '›')}
+      {step('next', 'Next', '›', ']')}
       <button type="button" className="link" onClick={() => onMove('random')}>
         Random
       </button>

@@ -1,7 +1,7 @@
 import { autocompletion, type CompletionContext, type CompletionResult } from '@codemirror/autocomplete';
 import { javascriptLanguage } from '@codemirror/lang-javascript';
 import { HighlightStyle, syntaxHighlighting } from '@codemirror/language';
-import { lintGutter, type Diagnostic } from '@codemirror/lint';
+import type { Diagnostic } from '@codemirror/lint';
 import type { Extension } from '@codemirror/state';
 import { EditorView, hoverTooltip } from '@codemirror/view';
 import { tags } from '@lezer/highlight';
@@ -89,10 +89,20 @@ export function scriptExtensions(rows: () => readonly QuantityRow[], label: stri
     syntaxHighlighting(INK),
     autocompletion({ override: [complete(rows)], icons: false }),
     hover(rows),
-    lintGutter(),
     EditorView.lineWrapping,
     EditorView.contentAttributes.of({ 'aria-label': label, spellcheck: 'false' }),
   ];
+}
+
+/** A sentence whose names between backticks are set in the script's face. */
+function sentenceNode(text: string): HTMLElement {
+  const node = document.createElement('span');
+  text.split('`').forEach((piece, index) => {
+    node.append(
+      index % 2 === 1 ? Object.assign(document.createElement('code'), { textContent: piece }) : piece,
+    );
+  });
+  return node;
 }
 
 /** Underlines in the editor's own form; a cure becomes a button beside the message. */
@@ -102,6 +112,7 @@ export function editorDiagnostics(underlines: readonly Underline[]): Diagnostic[
     to,
     severity,
     message,
+    renderMessage: () => sentenceNode(message),
     ...(fix === null
       ? {}
       : {

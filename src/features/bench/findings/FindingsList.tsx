@@ -1,6 +1,7 @@
 import { useState } from 'react';
 
 import type { Finding, ItemContent, Severity } from '#shared/engine/index.ts';
+import { Sentence } from '#src/components/ui/Sentence.tsx';
 import { findingTarget, groupFindings, isAccepted, type FindingTarget } from './group-findings.ts';
 
 const GROUPS: Readonly<Record<Severity, { title: string; sign: string; tone: string }>> = {
@@ -59,8 +60,14 @@ function FindingEntry({ finding, ...props }: FindingsListProps & { finding: Find
         {accepted ? '✓' : sign}
       </span>
       <div>
-        <p className={accepted ? 'text-muted' : undefined}>{finding.statement}</p>
-        {finding.cure !== '' && <p className="text-sm text-muted">{finding.cure}</p>}
+        <p className={accepted ? 'text-muted' : undefined}>
+          <Sentence text={finding.statement} />
+        </p>
+        {finding.cure !== '' && (
+          <p className="text-sm text-muted">
+            <Sentence text={finding.cure} />
+          </p>
+        )}
         <p className="flex flex-wrap gap-x-4 text-sm">
           {target !== null && (
             <button type="button" className="link" onClick={() => onVisit(target)}>

@@ -2,6 +2,7 @@ import { useId, useRef } from 'react';
 
 import { ITEM_LIMITS } from '#shared/engine/index.ts';
 import type { PlacedDiagnostic, QuantityRow } from '#shared/contracts/checking.ts';
+import { Sentence } from '#src/components/ui/Sentence.tsx';
 import { asMaths, inserted } from './insert-text.ts';
 
 interface PrintedTextFieldProps {
@@ -54,7 +55,7 @@ export function PrintedTextField({
             </button>
             <select
               className="field text-sm"
-              aria-label={`Put a value into: ${label}`}
+              aria-label={`Insert a value: ${label}`}
               value=""
               onChange={(event) => {
                 const name = event.target.value;
@@ -89,7 +90,7 @@ export function PrintedTextField({
             key={`${diagnostic.span.start} ${diagnostic.message}`}
             className={diagnostic.severity === 'error' ? 'text-lead' : 'text-brass'}
           >
-            {diagnostic.message}{' '}
+            <Sentence text={diagnostic.message} />{' '}
             {diagnostic.fix !== undefined && !readOnly && (
               <button
                 type="button"

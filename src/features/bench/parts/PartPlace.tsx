@@ -3,6 +3,7 @@ import type { PlacedDiagnostic, QuantityRow } from '#shared/contracts/checking.t
 import type { ItemScheme } from '#shared/sheet/model.ts';
 import type { DraftEditor } from '../draft/use-draft.ts';
 import type { BenchSlots } from '../slots.ts';
+import { EditorPlace } from '../EditorPlace.tsx';
 import { bandFromStrip } from './band-from-strip.ts';
 import { PartEditor } from './PartEditor.tsx';
 import { PartTools } from './PartTools.tsx';
@@ -18,7 +19,6 @@ interface PartPlaceProps {
   readOnly: boolean;
   editing: boolean;
   onEdit: () => void;
-  onRemoved: (letter: string) => void;
   onVisitDraw: (draw: number) => void;
   renderScale: BenchSlots['scale'];
 }
@@ -72,14 +72,11 @@ export function PartPlace(props: PartPlaceProps) {
           editing={editing}
           onEdit={props.onEdit}
           onMove={(step) => draft.movePart(partId, step)}
-          onRemove={() => {
-            draft.removePart(partId);
-            props.onRemoved(letter);
-          }}
+          onRemove={() => draft.removePart(partId)}
         />
       )}
       {editing && (
-        <section aria-label={`Editing part (${letter})`} className="bench-editor">
+        <EditorPlace label={`Editing part (${letter})`}>
           <PartEditor
             part={part}
             letter={letter}
@@ -89,7 +86,7 @@ export function PartPlace(props: PartPlaceProps) {
             readOnly={readOnly}
             onChange={(change, label, field) => draft.changePart(partId, change, label, field)}
           />
-        </section>
+        </EditorPlace>
       )}
     </div>
   );

@@ -4,6 +4,7 @@ import type { StoredAssay } from '#shared/contracts/items.ts';
 import type { PersonName } from '#shared/contracts/people.ts';
 import type { ItemContent } from '#shared/engine/index.ts';
 import { sentenceOf } from '#src/lib/api.ts';
+import { Sentence } from '#src/components/ui/Sentence.tsx';
 import { findingTarget, isAccepted, type FindingTarget } from '../findings/group-findings.ts';
 import { SendForm, type Sending } from './SendForm.tsx';
 
@@ -79,7 +80,7 @@ export function SendPanel(props: SendPanelProps) {
                 <span aria-hidden="true" className="text-lead">
                   ■
                 </span>{' '}
-                {finding.statement}{' '}
+                <Sentence text={finding.statement} />{' '}
                 {target !== null && (
                   <button type="button" className="link" onClick={() => onVisit(target)}>
                     Go to {target.label}
