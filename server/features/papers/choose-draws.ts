@@ -13,8 +13,8 @@ export interface DrawWanted {
   draw: number | null;
 }
 
-/** Chances that are taken to find values that another paper does not have. */
-const TRIES_FOR_NEW = 4;
+/** Chances, evenly spread from the first one, that are taken to find values that another paper does not have. */
+const TRIES_FOR_NEW = 8;
 /** Rounds in which draws that give an answer away are chosen anew. */
 const ROUNDS = 4;
 
@@ -23,14 +23,18 @@ async function choose(
   { content }: DrawWanted,
   used: ReadonlySet<number>,
 ): Promise<number> {
-  let draw = 1;
+  const start = context.random();
+  let first: number | null = null;
   for (let trial = 0; trial < TRIES_FOR_NEW; trial += 1) {
-    const chosen = await context.engine.chooseDraw(content, context.random());
+    const chance = (start + trial / TRIES_FOR_NEW) % 1;
+    const chosen = await context.engine.chooseDraw(content, chance);
     // Where no draw is kept, the paper's own checks say so.
-    draw = chosen.draw ?? 1;
-    if (!used.has(draw) || (!chosen.open && chosen.gridSize <= used.size)) break;
+    if (chosen.draw === null) return 1;
+    if (!used.has(chosen.draw)) return chosen.draw;
+    first ??= chosen.draw;
+    if (!chosen.open && chosen.gridSize <= used.size) break;
   }
-  return draw;
+  return first ?? 1;
 }
 
 /** Throws AppError invalid where a draw is asked for that the item's grid does not have. */
