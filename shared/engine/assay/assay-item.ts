@@ -1,6 +1,7 @@
 import { compileScript } from '../compile/compile-script.ts';
 import type { Compilation, DrawSelection } from '../compile/compiled-script.ts';
 import { evaluateBlock } from '../compile/evaluate.ts';
+import { roundToDecimals } from '../units/rounding.ts';
 import { coverageStatement } from '../draws/coverage.ts';
 import { planDraws } from '../draws/sampling.ts';
 import type { Diagnostic } from '../diagnostics/diagnostic.ts';
@@ -125,7 +126,9 @@ export function assayItem(
       distributions: distributions.tell(),
       scales: answers.scales().map((scale) => ({
         ...scale,
-        sensitivities: dependence.sensitivities(scale.partId).map(({ name, percent }) => ({ name, percent })),
+        sensitivities: dependence
+          .sensitivities(scale.partId)
+          .map(({ name, percent }) => ({ name, percent: roundToDecimals(percent, 6) })),
         sharedAnswers: variety.sharedAnswers(scale.partId),
       })),
     },

@@ -7,6 +7,7 @@ import { formatNumber } from '../units/format.ts';
 import { drawsShow, finding, shareInWords, Tally, type CheckStart } from './check.ts';
 import { bindRoles, isBound, roleValue, type BoundSet } from './roles-bound.ts';
 import type { AssayContext } from './context.ts';
+import type { Finding } from './report.ts';
 
 /** Room for constants that a script writes as numbers to two or three figures, as g = 9.81 m s⁻²; relative. */
 const FLOOR = 5e-3;
@@ -131,22 +132,53 @@ export const checkLaws: CheckStart = (context) => {
         }
       }
     },
-    finish: () =>
-      bound
-        .filter(({ tally }) => tally.count > 0)
-        .map(({ law, set, tally, worstRatio }) => {
-          const name = set.names.get(law.subject) ?? law.subject;
-          const role = findRole(law.subject)?.name ?? law.subject;
-          const suggestion =
-            worstRatio > 0 ? suggestForFactor(worstRatio) : 'The sign is the other way round.';
-          const info = context.script.quantities.find((quantity) => quantity.name === name);
-          return finding('law-broken', {
-            about: `${law.id}:${set.set}`,
-            statement: `The script’s “${name}” (${role}) is ${missInWords(worstRatio)} what ${law.statement} gives, on draw ${tally.worstDraw}; ${drawsShow(tally.count)}.${suggestion === '' ? '' : ` ${suggestion}`}`,
-            cure: `Mend the line that works out “${name}”, or correct what the quantities stand for.`,
-            place: { quantity: name, span: info?.span },
-            tally,
-          });
-        }),
+    finish: () => byCulprit(context, bound).map((entries) => tell(context, entries)),
   };
 };
+
+/** The name that is worked out last among those that a law binds: the line to look at. */
+function culpritOf(context: AssayContext, { names, set, law }: BoundLaw): string {
+  const computed = context.script.quantities.filter(
+    ({ name, kind }) => kind === 'computed' && names.includes(name),
+  );
+  return computed.at(-1)?.name ?? set.names.get(law.subject) ?? law.subject;
+}
+
+/** Broken laws, those that one line breaks together, the law that binds fewest first. */
+function byCulprit(context: AssayContext, bound: readonly BoundLaw[]): [BoundLaw, ...BoundLaw[]][] {
+  const groups = new Map<string, [BoundLaw, ...BoundLaw[]]>();
+  const broken = bound.filter(({ tally }) => tally.count > 0);
+  for (const entry of broken.sort((a, b) => a.names.length - b.names.length)) {
+    const key = `${entry.set.set}:${culpritOf(context, entry)}`;
+    const group = groups.get(key);
+    if (group === undefined) groups.set(key, [entry]);
+    else group.push(entry);
+  }
+  return [...groups.values()];
+}
+
+function tell(context: AssayContext, [first, ...others]: [BoundLaw, ...BoundLaw[]]): Finding {
+  const { law, set, tally, worstRatio } = first;
+  const subject = set.names.get(law.subject) ?? law.subject;
+  const role = findRole(law.subject)?.name ?? law.subject;
+  const suggestion = worstRatio > 0 ? suggestForFactor(worstRatio) : 'The sign is the other way round.';
+  const culprit = culpritOf(context, first);
+  const also = [...new Set(others.map((other) => other.law.statement))].filter(
+    (statement) => statement !== law.statement,
+  );
+  const pieces = [
+    `The script’s “${subject}” (${role}) is ${missInWords(worstRatio)} what ${law.statement} gives, on draw ${tally.worstDraw}; ${drawsShow(tally.count)}.`,
+    ...(suggestion === '' ? [] : [suggestion]),
+    ...(also.length === 0 ? [] : [`The same line breaks ${also.join('; ')}.`]),
+  ];
+  return finding('law-broken', {
+    about: `${law.id}:${set.set}`,
+    statement: pieces.join(' '),
+    cure: `Mend the line that works out “${culprit}”, or correct what the quantities stand for.`,
+    place: {
+      quantity: culprit,
+      span: context.script.quantities.find((quantity) => quantity.name === culprit)?.span,
+    },
+    tally,
+  });
+}

@@ -78,6 +78,21 @@ describe('printing', () => {
     expect(print(item)).toMatchObject([{ code: 'answer-printed', severity: 'caution' }]);
   });
 
+  it('questions a result that is printed rounded and used in full', () => {
+    const item = (field: string) =>
+      itemWith(
+        `Va = draw(150 V, 300 V, 10 V)\nd = 12.0 mm\nE = ${field}\nF = e * E`,
+        [{ quantity: 'F', unit: 'N' }],
+        {
+          stem: 'Plates {{d}} apart have a field of {{E to kV m^-1, 2 sf}}.',
+        },
+      );
+    expect(print(item('Va / d'))).toMatchObject([
+      { code: 'printed-in-full', severity: 'caution', place: { quantity: 'E', span: { line: 3 } } },
+    ]);
+    expect(print(item('given(Va / d, 2)'))).toEqual([]);
+  });
+
   it('questions a value that is shown no finer than it is stated, or not stated', () => {
     const shows = (figures: number, text?: string) =>
       itemWith(SCRIPT, [{ ...PART, figures, shows: 2, ...(text === undefined ? {} : { text }) }]);

@@ -68,6 +68,33 @@ function answerPrinted(context: AssayContext): Finding[] {
   });
 }
 
+/** Results that are printed rounded although the working goes on with them in full. */
+function printedInFull(context: AssayContext): Finding[] {
+  const readable = new Set(context.printed.map(({ name }) => name));
+  const shown = new Set(context.parts.map(({ info }) => info.name));
+  const used = new Set(context.parts.flatMap(({ dependencies }) => dependencies.intermediates));
+  const texts = printedTexts(context).filter(({ forCandidates }) => forCandidates);
+  return context.script.quantities
+    .filter(({ name, kind }) => kind === 'computed' && used.has(name))
+    .filter(({ name }) => !readable.has(name) && !shown.has(name))
+    .flatMap((info) => {
+      const where = texts.find(({ text }) =>
+        findHoles(text).holes.some((hole) =>
+          hole.names.some((name) => name.replace(/\[.*$/, '') === info.name),
+        ),
+      );
+      if (where === undefined) return [];
+      return [
+        finding('printed-in-full', {
+          about: info.name,
+          statement: `“${info.name}” is printed rounded in ${where.words}, but the script goes on with it in full, which the candidate cannot.`,
+          cure: `Write ${info.name} = given(…, figures), so that the answers follow from what is printed.`,
+          place: { quantity: info.name, span: info.span, field: where.field },
+        }),
+      ];
+    });
+}
+
 function partFindings(context: AssayContext): Finding[] {
   const known = new Map(context.script.quantities.map((info) => [info.name, info]));
   return context.content.parts.flatMap((part, index): Finding[] => {
@@ -207,6 +234,7 @@ export const checkPrint: CheckStart = (context) => {
       ...holeFindings(context),
       ...mathsFindings(context),
       ...answerPrinted(context),
+      ...printedInFull(context),
       ...partFindings(context),
       ...figureFindings(context),
       ...numbers.finish(),

@@ -64,6 +64,7 @@ export const SEVERITY_TABLE = {
   'value-not-stated': ['print', 'caution', 'A part that shows a value should state it.'],
   'awkward-number': ['print', 'note', 'Numbers from 0.1 to 1000 in their unit read best.'],
   'answer-printed': ['print', 'caution', 'The candidate can copy the answer from the paper.'],
+  'printed-in-full': ['print', 'caution', 'The answers do not follow from what is printed.'],
   'show-that-figures': ['print', 'caution', 'A value shown must be finer than the value stated.'],
   'ambiguous-zeros': ['print', 'note', 'Figures are enforced that the givens leave open.'],
   'text-empty': ['print', 'caution', 'The part asks nothing.'],
