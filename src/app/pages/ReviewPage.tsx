@@ -10,6 +10,7 @@ import { ScaleStrip } from '#src/features/scale-strip/ScaleStrip.tsx';
 import { SchemeView } from '#src/features/sheet/SchemeView.tsx';
 import { SheetView } from '#src/features/sheet/SheetView.tsx';
 import { usePageTitle } from '../layout/use-page-title.ts';
+import { usePerson } from '../layout/use-person.ts';
 
 const SLOTS: ReviewSlots = {
   sheet: (sheet) => <SheetView sheet={sheet} />,
@@ -21,6 +22,7 @@ const SLOTS: ReviewSlots = {
 /** One review, from claiming it to the decision. */
 export function ReviewPage() {
   const navigate = useNavigate();
+  const mayOpen = usePerson().abilities.includes('item.read');
   const reviewId = Number(useParams()['reviewId']);
   const review = useQuery(reviewQuery(reviewId));
   const title = review.data === undefined ? 'Review' : `Review of ${review.data.itemCode}`;
@@ -29,7 +31,13 @@ export function ReviewPage() {
   return (
     <Awaited query={review} what="the review" whole>
       {(data) => (
-        <ReviewDesk key={reviewId} review={data} onReleased={() => void navigate('/desk')} slots={SLOTS} />
+        <ReviewDesk
+          key={reviewId}
+          review={data}
+          itemPath={mayOpen && data.stage !== 'working' ? `/items/${data.itemId}` : null}
+          onReleased={() => void navigate('/desk')}
+          slots={SLOTS}
+        />
       )}
     </Awaited>
   );

@@ -4,6 +4,7 @@ import { useState, type ReactNode } from 'react';
 import type { Item, StoredAssay } from '#shared/contracts/items.ts';
 import type { ItemContent } from '#shared/engine/index.ts';
 import { AppError } from '#shared/errors/app-error.ts';
+import { tell } from '#src/components/ui/notices.ts';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
 import { sentenceOf } from '#src/lib/api.ts';
 import { reviewersQuery, revisionsQuery, type BenchCalls } from './api.ts';
@@ -88,6 +89,7 @@ export function BenchActions(props: BenchActionsProps) {
             const version = await saveNow();
             if (version === null) throw new AppError('notPossible', NOT_SAVED);
             await done(await calls.send(sending, version));
+            tell(`${item.code} is sent to review.`);
           }}
           onCancel={close}
           onVisit={(target) => {

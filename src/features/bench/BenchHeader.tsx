@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { Link } from 'react-router';
 
 import { ITEM_STATE_NAMES } from '#shared/domain/item-life.ts';
 import type { Item } from '#shared/contracts/items.ts';
@@ -45,6 +46,11 @@ export function BenchHeader(props: BenchHeaderProps) {
             </button>
           )}
           {checking && <span className="text-muted">Checking</span>}
+          {item.reviewId !== null && (
+            <Link className="link" to={`/reviews/${item.reviewId}`}>
+              Review and comments
+            </Link>
+          )}
           {readOnly ? null : <SaveState state={autosave.state} onRetry={autosave.retry} />}
         </p>
       </div>

@@ -85,7 +85,7 @@ export function DecisionForm({ review, onDecide }: DecisionFormProps) {
         </fieldset>
       )}
       <fieldset>
-        <legend className="font-semibold">Decision</legend>
+        <legend className="sr-only">Decision</legend>
         <label className="check">
           <input type="radio" value="approved" disabled={hindrances.length > 0} {...register('decision')} />{' '}
           Approve this revision

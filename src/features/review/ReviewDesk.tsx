@@ -2,6 +2,7 @@ import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 
 import type { Review } from '#shared/contracts/reviews.ts';
+import { tell } from '#src/components/ui/notices.ts';
 import { sentenceOf } from '#src/lib/api.ts';
 import { reviewCalls, reviewQuery } from './api.ts';
 import { CommentsPanel } from './CommentsPanel.tsx';
@@ -14,13 +15,15 @@ import type { ReviewSlots } from './slots.ts';
 
 export interface ReviewDeskProps {
   review: Review;
+  /** Where the item stands on the bench, for those who may open it there. */
+  itemPath: string | null;
   /** Called when the review is given back and can no longer be open here. */
   onReleased: () => void;
   slots: ReviewSlots;
 }
 
 /** One review, from claiming it over one's own working and the reveal to the decision. */
-export function ReviewDesk({ review, onReleased, slots }: ReviewDeskProps) {
+export function ReviewDesk({ review, itemPath, onReleased, slots }: ReviewDeskProps) {
   const queries = useQueryClient();
   const [calls] = useState(() => reviewCalls(review.id));
   const [busy, setBusy] = useState(false);
@@ -46,7 +49,7 @@ export function ReviewDesk({ review, onReleased, slots }: ReviewDeskProps) {
 
   return (
     <div className="review">
-      <ReviewHeader review={review} />
+      <ReviewHeader review={review} itemPath={itemPath} />
       {problem !== null && (
         <p role="alert" className="notice text-lead">
           {problem}
@@ -121,7 +124,15 @@ export function ReviewDesk({ review, onReleased, slots }: ReviewDeskProps) {
               <h2 id="review-decision" className="section-title">
                 Decision
               </h2>
-              <DecisionForm review={review} onDecide={(decision) => act(() => calls.decide(decision))} />
+              <DecisionForm
+                review={review}
+                onDecide={async (decision) => {
+                  await act(() => calls.decide(decision));
+                  tell(
+                    `${review.itemCode} is ${decision.decision === 'approved' ? 'approved' : 'returned to its writer'}.`,
+                  );
+                }}
+              />
             </section>
           )}
         </div>

@@ -1,3 +1,5 @@
+import { Link } from 'react-router';
+
 import type { Review } from '#shared/contracts/reviews.ts';
 import { countOf, formatDay } from '#src/lib/format.ts';
 
@@ -14,7 +16,7 @@ const DECISIONS = {
 } as const;
 
 /** What is under review, at which stage, for whom and until when; and the writer's note. */
-export function ReviewHeader({ review }: { review: Review }) {
+export function ReviewHeader({ review, itemPath }: { review: Review; itemPath: string | null }) {
   const stage = review.decision === null ? STAGES[review.stage] : DECISIONS[review.decision];
   return (
     <header className="mb-6">
@@ -30,6 +32,11 @@ export function ReviewHeader({ review }: { review: Review }) {
         <span className="text-muted">
           sent by {review.requestedBy.name}, {formatDay(review.requestedAt)}
         </span>
+        {itemPath !== null && (
+          <Link className="link" to={itemPath}>
+            Open on the bench
+          </Link>
+        )}
         {review.dueOn !== null && <span>wanted by {formatDay(review.dueOn)}</span>}
       </p>
       {review.note !== '' && <p className="mt-2 max-w-prose">{review.note}</p>}

@@ -36,7 +36,7 @@ export function ReviewReveal({ review, canDecide, onSettle, slots }: ReviewRevea
             const reading = text === undefined ? null : readResponse(text);
             const unsettled = part.state === 'disagrees' || part.state === 'disputed';
             return (
-              <div key={part.partId} className="border-t border-rule py-3">
+              <div key={part.partId} className="grid gap-2 border-t border-rule py-3">
                 <h3 className="font-semibold">Part ({part.letter})</h3>
                 {part.tries.length > 0 && (
                   <p>

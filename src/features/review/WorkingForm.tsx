@@ -21,7 +21,7 @@ interface WorkingFormProps {
 
 const STATES: Readonly<Record<PartProgress['state'], string>> = {
   open: '',
-  agrees: 'Agrees with the checker.',
+  agrees: '',
   disagrees: 'Does not agree, and no try is left.',
   disputed: 'You hold to your working; this has to be settled before approval.',
   settled: 'Settled.',
@@ -49,7 +49,7 @@ export function WorkingForm({ part, busy, onTry, onDispute }: WorkingFormProps) 
       <h3 id={`${id}-title`} className="font-semibold">
         Part ({part.letter})
       </h3>
-      <ol className="grid gap-1">
+      <ol className="grid gap-1" aria-live="polite">
         {part.tries.map((working) => (
           <li key={working.attempt} className="flex flex-wrap gap-x-3">
             <span className="text-muted">Try {working.attempt}</span>
@@ -57,7 +57,9 @@ export function WorkingForm({ part, busy, onTry, onDispute }: WorkingFormProps) 
             <span className={working.agrees ? 'text-accent' : 'text-brass'}>
               {working.agrees ? '✓ agrees' : '✕ does not agree'}
             </span>
-            {working.remark !== '' && <span className="basis-full text-sm">{working.remark}</span>}
+            {!working.agrees && working.remark !== '' && (
+              <span className="basis-full text-sm">{working.remark}</span>
+            )}
           </li>
         ))}
       </ol>
@@ -97,7 +99,7 @@ export function WorkingForm({ part, busy, onTry, onDispute }: WorkingFormProps) 
           </p>
         </form>
       ) : (
-        <p role="status">{STATES[part.state]}</p>
+        STATES[part.state] !== '' && <p>{STATES[part.state]}</p>
       )}
       {(part.state === 'disagrees' || (part.state === 'open' && part.tries.length > 0)) && (
         <button type="button" className="link" disabled={busy} onClick={() => onDispute(part.partId)}>

@@ -76,7 +76,7 @@ export function ConflictView({ mine, theirs, base, onMerge }: ConflictViewProps)
     );
   return (
     <form
-      className="grid gap-6"
+      className="grid gap-6 pt-4"
       onSubmit={(event) => {
         event.preventDefault();
         onMerge(mergeVersions(mine, theirs, found, choices));
