@@ -106,6 +106,7 @@ describe('what stands beside the running order', () => {
             },
           ],
         }}
+        onShowOrder={() => undefined}
       />,
     );
     expect(screen.getByText('8 marks short')).toBeDefined();
@@ -120,10 +121,15 @@ describe('what stands beside the running order', () => {
       confirmedBy: { id: 2, name: 'Moderator' },
       sealedAt: '2026-03-02T10:00:00.000Z',
     };
-    render(<PaperAside paper={{ ...paper, state: 'sealed', seal }} />);
+    render(<PaperAside paper={{ ...paper, state: 'sealed', seal }} onShowOrder={() => undefined} />);
     expect(screen.getByText(/no longer has the hash/)).toBeDefined();
     cleanup();
-    render(<PaperAside paper={{ ...paper, state: 'sealed', seal: { ...seal, intact: true } }} />);
+    render(
+      <PaperAside
+        paper={{ ...paper, state: 'sealed', seal: { ...seal, intact: true } }}
+        onShowOrder={() => undefined}
+      />,
+    );
     expect(screen.queryByText(/no longer has the hash/)).toBeNull();
     expect(screen.getByText(`SHA-256 ${seal.sha256}`)).toBeDefined();
   });

@@ -2,8 +2,9 @@ import { useState } from 'react';
 
 import type { Paper } from '#shared/contracts/papers.ts';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
+import { unsaved } from '#src/components/ui/unsaved.ts';
 import { sentenceOf } from '#src/lib/api.ts';
-import type { PaperCalls } from './api.ts';
+import { type PaperCalls, storedPaperOf } from './api.ts';
 
 type Step = 'propose' | 'giveBack' | 'seal' | 'release';
 
@@ -69,7 +70,13 @@ export function PaperActions({ paper, calls, onChanged }: PaperActionsProps) {
       );
       close();
     } catch (error) {
-      setProblem(sentenceOf(error));
+      const stored = storedPaperOf(error);
+      if (stored === null) setProblem(sentenceOf(error));
+      else {
+        // Nobody takes a step on a paper that they have not seen.
+        onChanged(stored);
+        setProblem('Somebody else changed this paper meanwhile. Close this and look at it again first.');
+      }
     } finally {
       setBusy(false);
     }
@@ -95,6 +102,7 @@ export function PaperActions({ paper, calls, onChanged }: PaperActionsProps) {
         <Dialog title={STEPS[step].title} description={STEPS[step].explanation} open onClose={close}>
           <form
             className="grid gap-4"
+            {...unsaved(reason !== '' && !busy)}
             onSubmit={(event) => {
               event.preventDefault();
               void take(step);
@@ -105,6 +113,7 @@ export function PaperActions({ paper, calls, onChanged }: PaperActionsProps) {
                 <span className="field-label">Why</span>
                 <textarea
                   className="field autogrow w-full"
+                  autoFocus
                   required
                   value={reason}
                   onChange={(event) => setReason(event.target.value)}

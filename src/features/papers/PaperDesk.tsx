@@ -1,21 +1,21 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState, type ReactNode } from 'react';
 
-import { type Paper, type PaperDetails, paperSchema } from '#shared/contracts/papers.ts';
+import type { Paper, PaperDetails } from '#shared/contracts/papers.ts';
 import { PAPER_STATE_NAMES } from '#shared/domain/paper-life.ts';
-import { AppError } from '#shared/errors/app-error.ts';
 import type { PaperScheme, PaperSheet } from '#shared/sheet/model.ts';
+import { Awaited } from '#src/components/ui/Awaited.tsx';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
-import { Failure, Loading } from '#src/components/ui/states.tsx';
 import { Tabs } from '#src/components/ui/Tabs.tsx';
-import { sentenceOf } from '#src/lib/api.ts';
-import { paperCalls, paperQuery, paperSheetQuery, papersQuery, type Place, placesOf } from './api.ts';
+import { paperCalls, paperQuery, paperSheetQuery, papersQuery, placesOf } from './api.ts';
 import { DetailsForm } from './DetailsForm.tsx';
 import { Exports } from './Exports.tsx';
 import { PaperActions } from './PaperActions.tsx';
 import { PaperAside } from './PaperAside.tsx';
 import { PickItems } from './PickItems.tsx';
+import { PlacesConflict } from './PlacesConflict.tsx';
 import { RunningOrder } from './RunningOrder.tsx';
+import { usePlaces } from './use-places.ts';
 
 interface PaperDeskProps {
   paper: Paper;
@@ -33,10 +33,11 @@ const VIEWS: readonly { view: View; name: string }[] = [
 
 function Preview({ paper, view, renderSheet, renderScheme }: PaperDeskProps & { view: View }) {
   const printed = useQuery(paperSheetQuery(paper.id, paper.version));
-  if (printed.isPending) return <Loading what="the pages" />;
-  if (printed.isError)
-    return <Failure message={sentenceOf(printed.error)} onRetry={() => void printed.refetch()} />;
-  return view === 'sheet' ? renderSheet(printed.data.sheet) : renderScheme(printed.data.scheme);
+  return (
+    <Awaited query={printed} what="the pages">
+      {({ sheet, scheme }) => (view === 'sheet' ? renderSheet(sheet) : renderScheme(scheme))}
+    </Awaited>
+  );
 }
 
 /** One paper: its running order, what its checks say, how it prints, and its next steps. */
@@ -46,112 +47,91 @@ export function PaperDesk(props: PaperDeskProps) {
   const [calls] = useState(() => paperCalls(paper.id));
   const [view, setView] = useState<View>('order');
   const [dialog, setDialog] = useState<'details' | 'pick' | null>(null);
-  const [busy, setBusy] = useState(false);
-  const [problem, setProblem] = useState<string | null>(null);
   const mayEdit = paper.state === 'assembling' && paper.abilities.includes('paper.edit');
-
   const show = (next: Paper) => {
     queries.setQueryData(paperQuery(paper.id).queryKey, next);
     void queries.invalidateQueries({ queryKey: papersQuery.queryKey });
     void queries.invalidateQueries({ queryKey: ['desk'] });
   };
-  /** After a conflict the paper as it now stands is shown, with what was not saved told in words. */
-  const failed = (error: unknown) => {
-    const stored = error instanceof AppError ? paperSchema.safeParse(error.current) : null;
-    if (stored?.success === true) {
-      show(stored.data);
-      setProblem(
-        'Somebody else changed this paper meanwhile. It is shown as it stands now; your last change was not made. Make it again if it is still wanted.',
-      );
-    } else setProblem(sentenceOf(error));
-  };
-  const save = async (places: Place[]) => {
-    setBusy(true);
-    setProblem(null);
-    try {
-      show(await calls.savePlaces(paper.version, places));
-    } catch (error) {
-      failed(error);
-    } finally {
-      setBusy(false);
-    }
-  };
+  const order = usePlaces({ paper, calls, onSaved: show });
   const saveDetails = async (details: PaperDetails) => {
-    try {
-      show(await calls.saveDetails(paper.version, details));
-      setDialog(null);
-    } catch (error) {
-      const stored = error instanceof AppError ? paperSchema.safeParse(error.current) : null;
-      if (stored?.success !== true) throw error;
-      // The form keeps what was typed; saving once more goes over the paper as it now stands.
-      show(stored.data);
-      throw new AppError(
-        'conflict',
-        'Somebody else changed this paper meanwhile. What you typed is still here; save again to put it in place of theirs.',
-      );
-    }
+    show(await calls.saveDetails(paper.version, details));
+    setDialog(null);
   };
 
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-6">
-      <div className="flex flex-wrap items-baseline gap-x-6 gap-y-2">
-        <span>
+      <div className="flex flex-wrap items-center gap-x-6 gap-y-2">
+        <p>
           {PAPER_STATE_NAMES[paper.state]}
           <span className="text-muted">
             , {paper.durationMinutes} minutes, begun by {paper.createdBy.name}
           </span>
-        </span>
+        </p>
         {mayEdit && (
           <button type="button" className="link" onClick={() => setDialog('details')}>
             Change the details
           </button>
         )}
-        <div className="ml-auto flex flex-wrap items-baseline gap-3">
+        <div className="flex flex-wrap items-center gap-3 sm:ml-auto">
           <PaperActions paper={paper} calls={calls} onChanged={show} />
         </div>
       </div>
-      <Exports paper={paper} calls={calls} />
-      {problem !== null && (
+      {order.problem !== null && (
         <p role="alert" className="notice notice-blocker">
-          {problem}
+          {order.problem}
         </p>
       )}
-      <Tabs label="Views of the paper" views={VIEWS} view={view} onView={setView}>
-        {view === 'order' ? (
-          <div className="grid grid-cols-[minmax(0,1fr)] gap-10 xl:grid-cols-[minmax(0,1fr)_24rem]">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 gap-y-10 xl:grid-cols-[minmax(0,1fr)_21rem]">
+        <Tabs label="Views of the paper" views={VIEWS} view={view} onView={setView}>
+          {view !== 'order' && <Preview {...props} view={view} />}
+          {view === 'order' && order.conflicting !== null && (
+            <PlacesConflict
+              paper={paper}
+              mine={order.conflicting}
+              nameOf={order.nameOf}
+              busy={order.busy}
+              onKeepStored={order.keepStored}
+              onPutMine={order.putMine}
+            />
+          )}
+          {view === 'order' && order.conflicting === null && (
             <div>
               <RunningOrder
                 paper={paper}
                 readOnly={!mayEdit}
-                busy={busy}
-                onSave={(places) => void save(places)}
+                busy={order.busy}
+                onSave={order.save}
+                onTakeOff={order.takeOff}
               />
               {mayEdit && (
                 <button
                   type="button"
                   className="button mt-4"
-                  disabled={busy}
+                  disabled={order.busy}
                   onClick={() => setDialog('pick')}
                 >
                   Pick items
                 </button>
               )}
             </div>
-            <PaperAside paper={paper} />
-          </div>
-        ) : (
-          <Preview {...props} view={view} />
-        )}
-      </Tabs>
+          )}
+        </Tabs>
+        <div className="grid content-start gap-8">
+          <PaperAside paper={paper} onShowOrder={() => setView('order')} />
+          <Exports paper={paper} calls={calls} />
+        </div>
+      </div>
       <Dialog title="Details of the paper" open={dialog === 'details'} onClose={() => setDialog(null)}>
         <DetailsForm details={paper} action="Save the details" onSave={saveDetails} />
       </Dialog>
       <Dialog title="Pick items" open={dialog === 'pick'} onClose={() => setDialog(null)} wide>
         <PickItems
           paper={paper}
-          onPick={(ids) => {
+          onPick={(items) => {
             setDialog(null);
-            void save([...placesOf(paper), ...ids.map((itemId) => ({ itemId, draw: null }))]);
+            order.learnNames(items);
+            order.save([...placesOf(paper), ...items.map(({ id }) => ({ itemId: id, draw: null }))]);
           }}
         />
       </Dialog>

@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useDeferredValue, useState } from 'react';
 
+import type { ItemRow } from '#shared/contracts/items.ts';
 import type { Paper } from '#shared/contracts/papers.ts';
 import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
 import { sentenceOf } from '#src/lib/api.ts';
@@ -9,28 +10,29 @@ import { approvedItemsQuery } from './api.ts';
 
 interface PickItemsProps {
   paper: Paper;
-  onPick: (itemIds: number[]) => void;
+  onPick: (items: ItemRow[]) => void;
 }
 
 /** Approved items that are not on the paper yet; several can be picked at once. */
 export function PickItems({ paper, onPick }: PickItemsProps) {
   const [search, setSearch] = useState('');
-  const [picked, setPicked] = useState<ReadonlySet<number>>(new Set());
+  const [picked, setPicked] = useState<ReadonlyMap<number, ItemRow>>(new Map());
   const items = useQuery(approvedItemsQuery(useDeferredValue(search)));
   const onPaper = new Set(paper.places.map((place) => place.itemId));
   const rows = items.data?.rows.filter((row) => !onPaper.has(row.id)) ?? [];
-  const toggle = (id: number) =>
+  const toggle = (row: ItemRow) =>
     setPicked((before) => {
-      const next = new Set(before);
-      if (!next.delete(id)) next.add(id);
+      const next = new Map(before);
+      if (!next.delete(row.id)) next.set(row.id, row);
       return next;
     });
+  const marks = [...picked.values()].reduce((sum, row) => sum + row.marks, paper.marks);
   return (
     <form
       className="grid gap-4"
       onSubmit={(event) => {
         event.preventDefault();
-        onPick([...picked]);
+        onPick([...picked.values()]);
       }}
     >
       <label>
@@ -51,7 +53,7 @@ export function PickItems({ paper, onPick }: PickItemsProps) {
         {rows.map((row) => (
           <li key={row.id} className="border-b border-rule/50 py-1">
             <label className="grid cursor-pointer grid-cols-[1.5rem_5rem_minmax(0,1fr)_auto] items-baseline gap-2">
-              <input type="checkbox" checked={picked.has(row.id)} onChange={() => toggle(row.id)} />
+              <input type="checkbox" checked={picked.has(row.id)} onChange={() => toggle(row)} />
               <span className="font-mono text-sm text-muted">{row.code}</span>
               <span>
                 {row.title}
@@ -65,9 +67,14 @@ export function PickItems({ paper, onPick }: PickItemsProps) {
           </li>
         ))}
       </ul>
-      <button type="submit" className="button button-primary justify-self-start" disabled={picked.size === 0}>
-        {picked.size === 0 ? 'Put on the paper' : `Put ${countOf(picked.size, 'item')} on the paper`}
-      </button>
+      <p className="flex flex-wrap items-baseline gap-x-5 gap-y-2">
+        <button type="submit" className="button button-primary" disabled={picked.size === 0}>
+          {picked.size === 0 ? 'Put on the paper' : `Put ${countOf(picked.size, 'item')} on the paper`}
+        </button>
+        <span className="text-muted" role="status">
+          {picked.size > 0 && `This makes ${marks} of ${paper.targetMarks} marks.`}
+        </span>
+      </p>
     </form>
   );
 }

@@ -1,5 +1,5 @@
 // @vitest-environment jsdom
-import { cleanup, render, screen } from '@testing-library/react';
+import { cleanup, fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { MemoryRouter } from 'react-router';
 import { afterEach, describe, expect, it, vi } from 'vitest';
@@ -46,9 +46,16 @@ const paperOf = (places: PaperPlace[]): Paper => ({
 /** Shows the order; `onSave` sees every order that is sent. */
 function show(places: PaperPlace[], readOnly = false) {
   const onSave = vi.fn();
+  const onTakeOff = vi.fn();
   const view = (shown: PaperPlace[], busy: boolean) => (
     <MemoryRouter>
-      <RunningOrder paper={paperOf(shown)} readOnly={readOnly} busy={busy} onSave={onSave} />
+      <RunningOrder
+        paper={paperOf(shown)}
+        readOnly={readOnly}
+        busy={busy}
+        onSave={onSave}
+        onTakeOff={onTakeOff}
+      />
     </MemoryRouter>
   );
   const { rerender } = render(view(places, false));
@@ -56,7 +63,7 @@ function show(places: PaperPlace[], readOnly = false) {
     rerender(view(places, true));
     rerender(view(shown, false));
   };
-  return { onSave, answer };
+  return { onSave, onTakeOff, answer };
 }
 
 describe('the running order', () => {
@@ -106,10 +113,41 @@ describe('the running order', () => {
   it('lets the server choose another draw, and takes a newer revision with a draw of its own', async () => {
     const user = userEvent.setup();
     const { onSave } = show([place(1, 1, 4)]);
-    await user.click(screen.getByRole('button', { name: 'another' }));
+    await user.click(screen.getByRole('button', { name: 'Choose a draw of EG-001 for me' }));
     expect(onSave).toHaveBeenLastCalledWith([{ itemId: 1, draw: null }]);
     await user.click(screen.getByRole('button', { name: 'take it' }));
     expect(onSave).toHaveBeenLastCalledWith([{ itemId: 1, draw: null, takeNewest: true }]);
+  });
+
+  it('steps to the draw before and the draw after', async () => {
+    const user = userEvent.setup();
+    const { onSave } = show([place(1, 1)]);
+    await user.click(screen.getByRole('button', { name: 'Next draw of EG-001' }));
+    expect(onSave).toHaveBeenLastCalledWith([{ itemId: 1, draw: 102 }]);
+    await user.click(screen.getByRole('button', { name: 'Previous draw of EG-001' }));
+    expect(onSave).toHaveBeenLastCalledWith([{ itemId: 1, draw: 100 }]);
+  });
+
+  it('puts a dragged row where it is dropped', () => {
+    const { onSave } = show([place(1, 1), place(2, 2), place(3, 3)]);
+    const rows = screen.getAllByRole('row').slice(1);
+    const grip = screen.getByRole('cell', { name: '3' });
+    fireEvent.dragStart(grip, { dataTransfer: {} });
+    fireEvent.dragOver(rows[0] ?? grip);
+    fireEvent.drop(rows[0] ?? grip);
+    expect(onSave).toHaveBeenCalledExactlyOnceWith([
+      { itemId: 3, draw: 103 },
+      { itemId: 1, draw: 101 },
+      { itemId: 2, draw: 102 },
+    ]);
+  });
+
+  it('asks for an item to be taken off', async () => {
+    const user = userEvent.setup();
+    const { onSave, onTakeOff } = show([place(1, 1), place(2, 2)]);
+    await user.click(screen.getByRole('button', { name: 'Take EG-002 off the paper' }));
+    expect(onTakeOff).toHaveBeenCalledExactlyOnceWith(2);
+    expect(onSave).not.toHaveBeenCalled();
   });
 
   it('offers no change when the paper may not be changed', () => {

@@ -46,7 +46,9 @@ export function RunningOrder({ paper, readOnly, busy, onSave, onTakeOff }: Runni
   };
 
   if (paper.places.length === 0) {
-    return <Empty>{readOnly ? 'There is no item on this paper.' : 'No item yet. Pick some from the bank.'}</Empty>;
+    return (
+      <Empty>{readOnly ? 'There is no item on this paper.' : 'No item yet. Pick some from the bank.'}</Empty>
+    );
   }
   return (
     <>

@@ -10,6 +10,7 @@ import {
   listPapers,
   type Paper,
   type PaperDetails,
+  paperSchema,
   proposePaper,
   releasePaper,
   returnPaper,
@@ -17,6 +18,7 @@ import {
   savePaperPlaces,
   sealPaper,
 } from '#shared/contracts/papers.ts';
+import { AppError } from '#shared/errors/app-error.ts';
 import { call, download } from '#src/lib/api.ts';
 
 export const papersQuery = queryOptions({
@@ -71,10 +73,16 @@ export function paperCalls(paperId: number) {
     giveBack: (version: number, reason: string) => call(returnPaper, { params, body: { version, reason } }),
     seal: (version: number) => call(sealPaper, { params, body: { version } }),
     release: (version: number) => call(releasePaper, { params, body: { version } }),
-    export: (kind: ExportKind) => download(exportPaper, { paperId, kind }),
+    export: (kind: ExportKind, signal: AbortSignal) => download(exportPaper, { paperId, kind }, signal),
   };
 }
 export type PaperCalls = ReturnType<typeof paperCalls>;
+
+/** The paper as the server holds it, when a request failed because somebody else had changed it. */
+export function storedPaperOf(error: unknown): Paper | null {
+  if (!(error instanceof AppError) || error.code !== 'conflict') return null;
+  return paperSchema.safeParse(error.current).data ?? null;
+}
 
 /** The running order of a paper as it is sent back. */
 export const placesOf = (paper: Paper): Place[] => paper.places.map(({ itemId, draw }) => ({ itemId, draw }));
