@@ -58,7 +58,7 @@ const sent: Sent[] = [];
 function server(path: string, init?: RequestInit): Response {
   if (path === '/api/session') return Response.json({ person: null, csrfToken: 'token' });
   if (init?.method === 'GET' || init === undefined) return Response.json(held);
-  const body = JSON.parse(String(init.body)) as Record<string, unknown>;
+  const body = JSON.parse(typeof init.body === 'string' ? init.body : '{}') as Record<string, unknown>;
   sent.push({ path, body });
   if (body['version'] !== held.version) {
     const { code, message } = new AppError('conflict', 'Somebody else changed this paper.');

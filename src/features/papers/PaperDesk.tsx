@@ -7,7 +7,7 @@ import type { PaperScheme, PaperSheet } from '#shared/sheet/model.ts';
 import { Awaited } from '#src/components/ui/Awaited.tsx';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
 import { Tabs } from '#src/components/ui/Tabs.tsx';
-import { paperCalls, paperQuery, paperSheetQuery, papersQuery, placesOf } from './api.ts';
+import { paperCalls, paperQuery, paperSheetQuery, papersQuery, placesOf, storedPaperOf } from './api.ts';
 import { DetailsForm } from './DetailsForm.tsx';
 import { Exports } from './Exports.tsx';
 import { PaperActions } from './PaperActions.tsx';
@@ -55,8 +55,15 @@ export function PaperDesk(props: PaperDeskProps) {
   };
   const order = usePlaces({ paper, calls, onSaved: show });
   const saveDetails = async (details: PaperDetails) => {
-    show(await calls.saveDetails(paper.version, details));
-    setDialog(null);
+    try {
+      show(await calls.saveDetails(paper.version, details));
+      setDialog(null);
+    } catch (error) {
+      // The form shows both versions; saving it again builds on the paper as it stands by then.
+      const stored = storedPaperOf(error);
+      if (stored !== null) show(stored);
+      throw error;
+    }
   };
 
   return (
