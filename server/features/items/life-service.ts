@@ -1,6 +1,5 @@
 import type { Item } from '#shared/contracts/items.ts';
 import { type ItemAction, itemTransition } from '#shared/domain/item-life.ts';
-import { worstSeverity } from '#shared/engine/index.ts';
 import { AppError } from '#shared/errors/app-error.ts';
 
 import type { AppContext } from '../../context.ts';
@@ -11,17 +10,11 @@ import { tellingCurrent } from '../../http/telling-current.ts';
 import { queueMail } from '../../jobs/queue-mail.ts';
 import { personById } from '../people/service.ts';
 import { recordEvent } from '../records/record-event.ts';
+import { freshAssay } from './assay-service.ts';
 import { isFresh } from './present.ts';
 import * as queries from './queries.ts';
-import {
-  demandVersion,
-  getItem,
-  readContent,
-  requireItem,
-  requireRevision,
-  runAssay,
-  subjectOf,
-} from './service.ts';
+import { demandVersion, getItem, readContent, requireItem, requireRevision, subjectOf } from './service.ts';
+import * as writing from './writing-queries.ts';
 
 /** Asks the item's life for the next state; throws AppError notPossible with the reason why not. */
 export function nextState(state: Parameters<typeof itemTransition>[0], action: ItemAction) {
@@ -38,7 +31,7 @@ export async function startRevision(context: AppContext, actor: SignedIn, itemId
     const revision = await requireRevision(tx, item.latestRevisionId);
     const { newRevision, event } = nextState(revision.state, { kind: 'edit' });
     if (newRevision) {
-      await queries.insertRevision(tx, {
+      await writing.insertRevision(tx, {
         itemId,
         number: revision.number + 1,
         authorId: actor.id,
@@ -57,29 +50,8 @@ export async function startRevision(context: AppContext, actor: SignedIn, itemId
   return getItem(context, actor, itemId);
 }
 
-/** Assays the latest revision unless that was done and nothing has moved since; keeps the result. */
-export async function freshAssay(context: AppContext, actor: SignedIn, itemId: number): Promise<void> {
-  const item = await requireItem(context.database, itemId);
-  const revision = await requireRevision(context.database, item.latestRevisionId);
-  const stored = await queries.selectNewestAssay(context.database, revision.id);
-  if (isFresh(stored, revision.contentHash)) return;
-  const { report, durationMs } = await runAssay(context, readContent(revision));
-  await inTransaction(context.database, async (tx) => {
-    await requireItem(tx, itemId, true);
-    await queries.insertAssay(tx, {
-      itemId,
-      revisionId: revision.id,
-      report,
-      durationMs,
-      requestedById: actor.id,
-      worst: worstSeverity(report.findings),
-      at: context.clock(),
-    });
-  });
-}
-
 /** Moves the item and its latest revision to a state that its life allows. */
-export const moveItem = queries.updateState;
+export const moveItem = writing.updateState;
 
 interface Sending {
   version: number;
@@ -149,8 +121,8 @@ export async function sendToReview(
     const reviewer =
       sending.reviewerId === null ? null : await requireReviewer(tx, sending.reviewerId, subject);
     const at = context.clock();
-    await queries.updateState(tx, { itemId, revisionId: revision.id, state, note: sending.note, at });
-    const reviewId = await queries.insertReview(tx, {
+    await writing.updateState(tx, { itemId, revisionId: revision.id, state, note: sending.note, at });
+    const reviewId = await writing.insertReview(tx, {
       itemId,
       revisionId: revision.id,
       requestedById: actor.id,
@@ -196,8 +168,8 @@ export async function recallItem(
     const revision = await requireRevision(tx, item.latestRevisionId);
     const { state, event } = nextState(revision.state, { kind: 'recall' });
     const at = context.clock();
-    await queries.updateState(tx, { itemId, revisionId: revision.id, state, at });
-    await queries.closeRecalledReview(tx, revision.id, reason, at);
+    await writing.updateState(tx, { itemId, revisionId: revision.id, state, at });
+    await writing.closeRecalledReview(tx, revision.id, reason, at);
     await recordEvent(tx, {
       event,
       actor,
@@ -222,7 +194,7 @@ export async function withdrawItem(
     demand(actor, 'item.withdraw', await subjectOf(tx, item, actor.id));
     const revision = await requireRevision(tx, item.latestRevisionId);
     const { state, event } = nextState(revision.state, { kind: 'withdraw' });
-    await queries.updateState(tx, {
+    await writing.updateState(tx, {
       itemId,
       revisionId: revision.id,
       state,

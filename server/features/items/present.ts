@@ -5,7 +5,8 @@ import { abilitiesFor, type Action, type Actor, type Subject } from '#shared/dom
 import { ENGINE_VERSION, type ItemContent } from '#shared/engine/index.ts';
 
 import type { assays } from '../../db/schema/index.ts';
-import type { ItemRecord, RevisionRow, selectItemPage } from './queries.ts';
+import type { selectItemPage } from './list-queries.ts';
+import type { ItemRecord, RevisionRow } from './queries.ts';
 
 const ITEM_ACTIONS: readonly Action[] = [
   'item.read',

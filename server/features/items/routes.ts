@@ -2,16 +2,9 @@ import * as contracts from '#shared/contracts/items.ts';
 
 import type { AppContext } from '../../context.ts';
 import { type Route, route } from '../../http/route.ts';
+import { assayLatest } from './assay-service.ts';
 import { recallItem, sendToReview, startRevision, withdrawItem } from './life-service.ts';
-import {
-  assayLatest,
-  createItem,
-  getItem,
-  getRevision,
-  listItems,
-  listRevisions,
-  saveDraft,
-} from './service.ts';
+import { createItem, getItem, getRevision, listItems, listRevisions, saveDraft } from './service.ts';
 
 /** The bank, and the life of each item. */
 export function itemRoutes(context: AppContext): Route[] {

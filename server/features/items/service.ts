@@ -1,7 +1,7 @@
 import type { Item, ItemQuery, StoredAssay } from '#shared/contracts/items.ts';
 import { itemTransition } from '#shared/domain/item-life.ts';
 import { permit, type Subject } from '#shared/domain/permissions.ts';
-import { assayedHash, type ItemContent, itemContentSchema, worstSeverity } from '#shared/engine/index.ts';
+import { assayedHash, type ItemContent, itemContentSchema } from '#shared/engine/index.ts';
 import { AppError, type FieldProblem } from '#shared/errors/app-error.ts';
 import { cautionsFor } from '#shared/sheet/cautions.ts';
 
@@ -11,12 +11,14 @@ import { takeNumber } from '../../db/take-number.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
 import { tellingCurrent } from '../../http/telling-current.ts';
-import { figureFacts, foreignFigures } from '../figures/stored-figures.ts';
+import { foreignFigures } from '../figures/stored-figures.ts';
 import { recordEvent } from '../records/record-event.ts';
 import { topicById } from '../topics/service.ts';
+import { selectItemPage } from './list-queries.ts';
 import { presentAssay, presentItem, presentRevision, presentRow } from './present.ts';
 import * as queries from './queries.ts';
 import { searchText } from './search-text.ts';
+import * as writing from './writing-queries.ts';
 
 /** What ownership rules ask about an item. */
 export async function subjectOf(
@@ -83,7 +85,7 @@ export async function previousApproved(
 
 export async function listItems(context: AppContext, actor: SignedIn, query: ItemQuery) {
   const viewer = { id: actor.id, opensItems: permit(actor, 'item.read').allowed };
-  const { rows, total } = await queries.selectItemPage(context.database, query, viewer);
+  const { rows, total } = await selectItemPage(context.database, query, viewer);
   const maySeePapers = permit(actor, 'paper.list').allowed;
   return {
     rows: rows.map((row) => presentRow(row, maySeePapers)),
@@ -141,7 +143,7 @@ export async function createItem(
     const topic = await topicById(tx, wanted.topicId);
     const number = await takeNumber(tx, `item:${topic.code}`);
     const code = `${topic.code}-${String(number).padStart(3, '0')}`;
-    const { itemId } = await queries.insertItem(tx, {
+    const { itemId } = await writing.insertItem(tx, {
       code,
       topicId: topic.id,
       ownerId: actor.id,
@@ -219,7 +221,7 @@ export async function saveDraft(
     await demandSoundContent(tx, itemId, wanted.content);
     const topicId = wanted.topicId === undefined ? item.topicId : (await topicById(tx, wanted.topicId)).id;
     const at = context.clock();
-    await queries.updateDraft(tx, {
+    await writing.updateDraft(tx, {
       itemId,
       revisionId: revision.id,
       version: revision.version,
@@ -257,50 +259,4 @@ export async function getRevision(context: AppContext, actor: SignedIn, itemId: 
     content: readContent(revision),
     assay: assay === null ? null : presentAssay(assay, revision.contentHash),
   };
-}
-
-/** Assays the content of a revision in the pool, outside any transaction. */
-export async function runAssay(context: AppContext, content: ItemContent) {
-  const figures = await figureFacts(context.database, content);
-  const started = performance.now();
-  const report = await context.engine.assay(content, { figures });
-  return { report, durationMs: Math.round((performance.now() - started) * 10) / 10 };
-}
-
-/**
- * Runs the full assay on the latest revision and keeps it with the content that it was run on; when the draft
- * has moved meanwhile, the reply says that it is stale.
- */
-export async function assayLatest(
-  context: AppContext,
-  actor: SignedIn,
-  itemId: number,
-): Promise<StoredAssay> {
-  const before = await requireItem(context.database, itemId);
-  demand(actor, 'item.assay', await subjectOf(context.database, before, actor.id));
-  const revision = await requireRevision(context.database, before.latestRevisionId);
-  const { report, durationMs } = await runAssay(context, readContent(revision));
-  return inTransaction(context.database, async (tx) => {
-    const item = await requireItem(tx, itemId, true);
-    await queries.insertAssay(tx, {
-      itemId: item.id,
-      revisionId: revision.id,
-      report,
-      durationMs,
-      requestedById: actor.id,
-      worst: worstSeverity(report.findings),
-      at: context.clock(),
-    });
-    const stored = await queries.selectNewestAssay(tx, revision.id);
-    if (stored === null) throw new Error('The assay is gone within its transaction.');
-    const now = await requireRevision(tx, revision.id);
-    await recordEvent(tx, {
-      event: 'item.assayed',
-      actor,
-      subjectType: 'item',
-      subjectId: item.id,
-      summary: `Assayed ${item.code} revision ${revision.number}: ${report.findings.length} findings.`,
-    });
-    return presentAssay(stored, now.contentHash);
-  });
 }

@@ -7,12 +7,13 @@ import { inTransaction } from '../../db/client.ts';
 import { demand } from '../../http/demand.ts';
 import type { SignedIn } from '../../http/signed-in.ts';
 import { queueMail } from '../../jobs/queue-mail.ts';
-import { freshAssay, moveItem, nextState } from '../items/life-service.ts';
+import { freshAssay } from '../items/assay-service.ts';
+import { moveItem, nextState } from '../items/life-service.ts';
 import { newestAssayOf, requireItem } from '../items/service.ts';
 import { personById } from '../people/service.ts';
 import { recordEvent } from '../records/record-event.ts';
 import * as queries from './queries.ts';
-import { currentWorkings, getReview, requireReview } from './service.ts';
+import { currentWorkings, getReview, requireReview } from './reading-service.ts';
 
 interface Decision {
   decision: 'approved' | 'returned';

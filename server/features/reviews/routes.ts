@@ -3,16 +3,17 @@ import * as contracts from '#shared/contracts/reviews.ts';
 import type { AppContext } from '../../context.ts';
 import { type Route, route } from '../../http/route.ts';
 import { decideReview } from './decide-service.ts';
+import { getReview, listReviews } from './reading-service.ts';
 import * as service from './service.ts';
 
 /** Reviews: the queue, the independent working, the reveal and the decision. */
 export function reviewRoutes(context: AppContext): Route[] {
   return [
     route(contracts.listReviews, { can: 'review.list' }, ({ actor, query }) =>
-      service.listReviews(context, actor, query.scope),
+      listReviews(context, actor, query.scope),
     ),
     route(contracts.getReview, { can: 'review.read' }, ({ actor, params }) =>
-      service.getReview(context, actor, params.reviewId),
+      getReview(context, actor, params.reviewId),
     ),
     route(contracts.claimReview, { can: 'review.claim' }, ({ actor, params }) =>
       service.claimReview(context, actor, params.reviewId),
