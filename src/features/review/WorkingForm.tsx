@@ -101,7 +101,7 @@ export function WorkingForm({ part, busy, onTry, onDispute }: WorkingFormProps) 
       ) : (
         STATES[part.state] !== '' && <p>{STATES[part.state]}</p>
       )}
-      {(part.state === 'disagrees' || (part.state === 'open' && part.tries.length > 0)) && (
+      {part.state === 'disagrees' && (
         <button type="button" className="link" disabled={busy} onClick={() => onDispute(part.partId)}>
           I hold to my working
         </button>

@@ -106,8 +106,13 @@ describe('the reviewer’s own working', () => {
       'Part (c) has no working yet.',
     );
     expect(revealHindrance(partsProgress(review([working('p', 1, false), working('q', 1, true)])))).toBe(
-      'Try (a) once more, or hold to your working.',
+      'Try (a) once more.',
     );
+    expect(
+      revealHindrance(
+        partsProgress(review([working('p', 1, false), working('p', 2, false), working('q', 1, true)])),
+      ),
+    ).toBe('Hold to your working of (a) to go on.');
     expect(
       revealHindrance(partsProgress(review([working('p', 1, false, true), working('q', 1, true)]))),
     ).toBeNull();

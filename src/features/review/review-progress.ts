@@ -42,10 +42,12 @@ const letters = (parts: readonly PartProgress[]): string =>
 export function revealHindrance(parts: readonly PartProgress[]): string | null {
   const unworked = parts.filter((part) => part.tries.length === 0);
   const undecided = parts.filter((part) => part.state === 'open' && part.tries.length > 0);
+  const unresolved = parts.filter((part) => part.state === 'disagrees');
   if (unworked.length === 1) return `Part ${letters(unworked)} has no working yet.`;
   if (unworked.length > 1) return `Parts ${letters(unworked)} have no working yet.`;
-  if (undecided.length === 0) return null;
-  return `Try ${letters(undecided)} once more, or hold to your working.`;
+  if (undecided.length > 0) return `Try ${letters(undecided)} once more.`;
+  if (unresolved.length > 0) return `Hold to your working of ${letters(unresolved)} to go on.`;
+  return null;
 }
 
 /** Cautions that neither the writer nor (in `accepted`) the reviewer has accepted with a reason. */
