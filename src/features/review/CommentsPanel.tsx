@@ -45,7 +45,7 @@ export function CommentsPanel({ comments, anchors, canComment, onComment }: Comm
   const lost = comments.filter((comment) => !anchors.some((anchor) => anchor.value === comment.anchor));
   const group = (name: string, list: readonly ReviewComment[]) => (
     <section key={name} aria-label={`Comments on ${name}`}>
-      <h4 className="text-sm font-semibold">On {name}</h4>
+      <h3 className="text-sm font-semibold">On {name}</h3>
       <ul className="grid gap-2">
         {list.map((comment) => (
           <li key={comment.id}>

@@ -1,4 +1,4 @@
-import { useId, useMemo, useState } from 'react';
+import { useMemo, useState } from 'react';
 
 import type { PartScale } from '#shared/engine/index.ts';
 import { RELATIVE_AXIS, unitAxis, printedUnit } from './axis.ts';
@@ -42,7 +42,6 @@ export function ScaleStrip({
   const [trial, setTrial] = useState<Interval | null>(null);
   const [inUnit, setInUnit] = useState(false);
   const [active, setActive] = useState<number | null>(null);
-  const heading = useId();
 
   const own = bandInterval(scale.band);
   const band = trial ?? own;
@@ -65,10 +64,7 @@ export function ScaleStrip({
   const routesFit = takesAllRoutes(scale, band);
 
   return (
-    <section aria-labelledby={heading} className="scale-strip grid gap-1" ref={container}>
-      <h4 id={heading} className="sr-only">
-        Scale of {name}
-      </h4>
+    <section aria-label={`Scale of ${name}`} className="scale-strip grid gap-1" ref={container}>
       <StripPicture
         geometry={geometry}
         axis={axis}

@@ -29,9 +29,9 @@ export function FindingsList(props: FindingsListProps) {
     <div className="grid gap-4">
       {groups.map(({ severity, findings }) => (
         <section key={severity} aria-label={GROUPS[severity].title}>
-          <h4 className={`font-semibold ${GROUPS[severity].tone}`}>
+          <h3 className={`font-semibold ${GROUPS[severity].tone}`}>
             {GROUPS[severity].title} <span className="font-normal">{findings.length}</span>
-          </h4>
+          </h3>
           <ul className="grid gap-3">
             {findings.map((finding) => (
               <FindingEntry key={finding.key} finding={finding} {...props} />

@@ -70,7 +70,7 @@ export function SchemeLinesEditor({ part, readOnly, onChange }: SchemeLinesEdito
           </li>
         ))}
       </ol>
-      <p className="mt-1 flex flex-wrap gap-x-4 text-sm">
+      <p className="mt-2 flex flex-wrap items-baseline gap-x-4 text-sm">
         {!readOnly && scheme.length < ITEM_LIMITS.schemeLines && (
           <button
             type="button"
