@@ -4,10 +4,11 @@ import { usePerson } from '../layout/use-person.ts';
 import { NotAllowed } from './NotAllowed.tsx';
 
 export function PeoplePage() {
-  if (!usePerson().abilities.includes('person.list')) return <NotAllowed what="People" />;
+  const { id, abilities } = usePerson();
+  if (!abilities.includes('person.list')) return <NotAllowed what="People" />;
   return (
     <Page title="People">
-      <People />
+      <People me={id} />
     </Page>
   );
 }

@@ -3,10 +3,10 @@ import { useCallback, useState } from 'react';
 import { useNavigate, useSearchParams } from 'react-router';
 
 import type { ItemQuery } from '#shared/contracts/items.ts';
+import { Awaited } from '#src/components/ui/Awaited.tsx';
 import { Dialog } from '#src/components/ui/Dialog.tsx';
 import { Pager } from '#src/components/ui/Pager.tsx';
-import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
-import { sentenceOf } from '#src/lib/api.ts';
+import { Empty } from '#src/components/ui/states.tsx';
 import { countOf } from '#src/lib/format.ts';
 import { bankQuery, readBankQuery } from './api.ts';
 import { keepHidden, readHidden } from './bank-columns.ts';
@@ -38,51 +38,51 @@ export function Bank({ mayWrite }: { mayWrite: boolean }) {
   const total = page.data?.total ?? 0;
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
-      <div className="flex flex-wrap items-baseline justify-between gap-4">
+      <BankFilters query={query} onChange={change}>
+        {mayWrite && (
+          <button type="button" className="button button-primary" onClick={() => setBeginning(true)}>
+            New item
+          </button>
+        )}
+      </BankFilters>
+      <div className="flex flex-wrap items-baseline justify-between gap-4 text-sm">
         <p className="text-muted" role="status">
-          {page.isSuccess ? countOf(total, 'item') : ''}
+          {page.data === undefined ? '' : countOf(total, 'item')}
         </p>
-        <div className="flex flex-wrap items-baseline gap-6">
-          <ColumnChoice
-            hidden={hidden}
-            onHidden={(next) => {
-              setHidden(next);
-              keepHidden(localStorage, next);
-            }}
-          />
-          {mayWrite && (
-            <button type="button" className="button button-primary" onClick={() => setBeginning(true)}>
-              New item
-            </button>
-          )}
-        </div>
-      </div>
-      <BankFilters query={query} onChange={change} />
-      {page.isPending && <Loading what="the bank" />}
-      {page.isError && <Failure message={sentenceOf(page.error)} onRetry={() => void page.refetch()} />}
-      {page.isSuccess && page.data.rows.length === 0 && (
-        <Empty>
-          {[...search.keys()].length === 0
-            ? 'The bank is empty. A writer begins the first item.'
-            : 'No item fits. Take a filter away, or search for fewer words.'}
-        </Empty>
-      )}
-      {page.isSuccess && page.data.rows.length > 0 && (
-        <BankTable
-          rows={page.data.rows}
-          query={query}
+        <ColumnChoice
           hidden={hidden}
-          onSort={(sort, direction) => change({ sort, direction })}
+          onHidden={(next) => {
+            setHidden(next);
+            keepHidden(localStorage, next);
+          }}
         />
-      )}
-      {page.isSuccess && (
-        <Pager
-          page={query.page}
-          pageSize={query.pageSize}
-          total={total}
-          onPage={(next) => change({ page: String(next) })}
-        />
-      )}
+      </div>
+      <Awaited query={page} what="the bank">
+        {({ rows }) =>
+          rows.length === 0 ? (
+            <Empty>
+              {[...search.keys()].length === 0
+                ? 'The bank is empty. A writer begins the first item.'
+                : 'No item fits. Take a filter away, or search for fewer words.'}
+            </Empty>
+          ) : (
+            <>
+              <BankTable
+                rows={rows}
+                query={query}
+                hidden={hidden}
+                onSort={(sort, direction) => change({ sort, direction })}
+              />
+              <Pager
+                page={query.page}
+                pageSize={query.pageSize}
+                total={total}
+                onPage={(next) => change({ page: String(next) })}
+              />
+            </>
+          )
+        }
+      </Awaited>
       <Dialog title="New item" open={beginning} onClose={() => setBeginning(false)}>
         <NewItemForm onBegun={(itemId) => void navigate(`/items/${itemId}`)} />
       </Dialog>

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useEffect, useId, useState } from 'react';
+import { useEffect, useId, useState, type ReactNode } from 'react';
 
 import type { ItemQuery } from '#shared/contracts/items.ts';
 import { ITEM_STATE_NAMES, ITEM_STATES } from '#shared/domain/item-life.ts';
@@ -10,6 +10,8 @@ type Change = Partial<Record<keyof ItemQuery, string>>;
 interface BankFiltersProps {
   query: ItemQuery;
   onChange: (change: Change) => void;
+  /** Whatever stands at the end of the line. */
+  children?: ReactNode;
 }
 
 /** Typing settles this long before the bank is asked. */
@@ -42,7 +44,7 @@ function Choice({ label, value, choices, onChoose }: ChoiceProps) {
 }
 
 /** Search and filters of the bank; all of them live in the address. */
-export function BankFilters({ query, onChange }: BankFiltersProps) {
+export function BankFilters({ query, onChange, children }: BankFiltersProps) {
   const topics = useQuery(topicsQuery);
   const writers = useQuery(writersQuery);
   const [typed, setTyped] = useState(query.search ?? '');
@@ -103,6 +105,7 @@ export function BankFilters({ query, onChange }: BankFiltersProps) {
         ]}
         onChoose={(finding) => onChange({ finding })}
       />
+      {children}
     </form>
   );
 }

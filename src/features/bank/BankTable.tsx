@@ -1,9 +1,9 @@
 import { createColumnHelper, flexRender, getCoreRowModel, useReactTable } from '@tanstack/react-table';
-import type { KeyboardEvent } from 'react';
 import { Link } from 'react-router';
 
 import type { ITEM_SORTS, ItemQuery, ItemRow } from '#shared/contracts/items.ts';
 import { ITEM_STATE_NAMES } from '#shared/domain/item-life.ts';
+import { moveRow } from '#src/components/ui/move-row.ts';
 import { SeverityWord } from '#src/components/ui/SeverityWord.tsx';
 import { formatDay } from '#src/lib/format.ts';
 import type { OptionalColumn } from './bank-columns.ts';
@@ -78,17 +78,9 @@ const SORTABLE = new Set<string>([
   'updated',
 ] satisfies Sort[]);
 const NUMBERS = new Set(['marks', 'revision', 'usedOn']);
-
-/** Up and down go from row to row; each row's link is its own stop. */
-function moveRow(event: KeyboardEvent<HTMLTableSectionElement>): void {
-  if (event.key !== 'ArrowDown' && event.key !== 'ArrowUp') return;
-  const links = Array.from(event.currentTarget.querySelectorAll('a'));
-  const at = links.indexOf(document.activeElement as HTMLAnchorElement);
-  const next = links[at + (event.key === 'ArrowDown' ? 1 : -1)];
-  if (at < 0 || next === undefined) return;
-  event.preventDefault();
-  next.focus();
-}
+/** Columns whose words belong on one line. */
+const UNBROKEN = new Set(['code', 'state', 'worstFinding', 'updated']);
+const classOf = (id: string) => (NUMBERS.has(id) ? 'number' : UNBROKEN.has(id) ? 'whitespace-nowrap' : '');
 
 /** One page of the bank. */
 export function BankTable({ rows, query, hidden, onSort }: BankTableProps) {
@@ -101,17 +93,12 @@ export function BankTable({ rows, query, hidden, onSort }: BankTableProps) {
   });
   const ariaSort = (id: string) => (query.sort === id ? query.direction : 'none');
   return (
-    <div className="overflow-x-auto">
+    <div className="table-place">
       <table className="list-table">
         <thead>
           <tr>
             {table.getFlatHeaders().map((header) => (
-              <th
-                key={header.id}
-                scope="col"
-                aria-sort={ariaSort(header.id)}
-                className={NUMBERS.has(header.id) ? 'number' : ''}
-              >
+              <th key={header.id} scope="col" aria-sort={ariaSort(header.id)} className={classOf(header.id)}>
                 {SORTABLE.has(header.id) ? (
                   <button
                     type="button"
@@ -141,7 +128,7 @@ export function BankTable({ rows, query, hidden, onSort }: BankTableProps) {
           {table.getRowModel().rows.map((row) => (
             <tr key={row.id} className="row-link">
               {row.getVisibleCells().map((cell) => (
-                <td key={cell.id} className={NUMBERS.has(cell.column.id) ? 'number' : ''}>
+                <td key={cell.id} className={classOf(cell.column.id)}>
                   {flexRender(cell.column.columnDef.cell, cell.getContext())}
                 </td>
               ))}

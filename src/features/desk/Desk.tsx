@@ -2,8 +2,10 @@ import { queryOptions, useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
 
 import { type DeskReply, getDesk } from '#shared/contracts/desk.ts';
-import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
-import { call, sentenceOf } from '#src/lib/api.ts';
+import { Awaited } from '#src/components/ui/Awaited.tsx';
+import { moveRow } from '#src/components/ui/move-row.ts';
+import { Empty } from '#src/components/ui/states.tsx';
+import { call } from '#src/lib/api.ts';
 import { formatAge, formatDay } from '#src/lib/format.ts';
 
 export const deskQuery = queryOptions({
@@ -59,15 +61,20 @@ function DeskGroup({ group }: { group: Group }) {
 /** What waits for me, by role; nothing else. */
 export function Desk() {
   const desk = useQuery(deskQuery);
-  if (desk.isPending) return <Loading what="your desk" />;
-  if (desk.isError) return <Failure message={sentenceOf(desk.error)} onRetry={() => void desk.refetch()} />;
-  const groups = desk.data.groups.filter((group) => group.total > 0);
-  if (groups.length === 0) return <Empty>Nothing waits for you. The bank and the papers are above.</Empty>;
   return (
-    <div className="max-w-4xl">
-      {groups.map((group) => (
-        <DeskGroup key={group.group} group={group} />
-      ))}
-    </div>
+    <Awaited query={desk} what="your desk">
+      {({ groups }) => {
+        const waiting = groups.filter((group) => group.total > 0);
+        return waiting.length === 0 ? (
+          <Empty>Nothing waits for you. The bank and the papers are above.</Empty>
+        ) : (
+          <div className="max-w-4xl" onKeyDown={moveRow}>
+            {waiting.map((group) => (
+              <DeskGroup key={group.group} group={group} />
+            ))}
+          </div>
+        );
+      }}
+    </Awaited>
   );
 }

@@ -26,7 +26,7 @@ export function DrawField({ place, busy, onDraw }: DrawFieldProps) {
     take();
   };
   return (
-    <span className="inline-flex flex-wrap items-center gap-x-3 gap-y-1 whitespace-nowrap">
+    <span className="inline-flex items-center gap-x-3 whitespace-nowrap">
       <span className="stepper">
         <button
           type="button"
@@ -37,7 +37,7 @@ export function DrawField({ place, busy, onDraw }: DrawFieldProps) {
           ‹
         </button>
         <input
-          className="field w-20 text-right font-mono text-sm"
+          className="field w-16 text-right font-mono text-sm"
           inputMode="numeric"
           aria-label={`Draw of ${itemCode}, 1 to ${gridSize}`}
           value={typed ?? String(draw)}

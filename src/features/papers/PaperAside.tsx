@@ -31,11 +31,11 @@ function Totals({ paper }: { paper: Paper }) {
           <tbody>
             {paper.marksByTopic.map(({ topic, marks }) => (
               <tr key={topic.id}>
-                <th scope="row" className="py-0.5 pr-3 text-left font-normal">
+                <th scope="row" className="py-0.5 pr-3 text-left font-normal whitespace-nowrap">
                   {topic.name}
                 </th>
                 <td className="w-8 pr-3 text-right">{marks}</td>
-                <td className="w-1/2">
+                <td className="w-2/5">
                   <Ticks count={marks} />
                 </td>
               </tr>

@@ -68,7 +68,7 @@ export function PaperDesk(props: PaperDeskProps) {
 
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-6">
-      <div className="flex flex-wrap items-center gap-x-6 gap-y-2">
+      <div className="-mt-3 flex flex-wrap items-center gap-x-6 gap-y-2">
         <p>
           {PAPER_STATE_NAMES[paper.state]}
           <span className="text-muted">

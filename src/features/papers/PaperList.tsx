@@ -1,22 +1,17 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
 
+import type { PaperRow } from '#shared/contracts/papers.ts';
 import { PAPER_STATE_NAMES } from '#shared/domain/paper-life.ts';
-import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
-import { sentenceOf } from '#src/lib/api.ts';
+import { Awaited } from '#src/components/ui/Awaited.tsx';
+import { moveRow } from '#src/components/ui/move-row.ts';
+import { Empty } from '#src/components/ui/states.tsx';
 import { formatDay } from '#src/lib/format.ts';
 import { papersQuery } from './api.ts';
 
-/** Every paper with its state and its total. */
-export function PaperList() {
-  const papers = useQuery(papersQuery);
-  if (papers.isPending) return <Loading what="the papers" />;
-  if (papers.isError)
-    return <Failure message={sentenceOf(papers.error)} onRetry={() => void papers.refetch()} />;
-  if (papers.data.papers.length === 0)
-    return <Empty>There is no paper yet. A setter begins the first.</Empty>;
+function PaperTable({ rows }: { rows: readonly PaperRow[] }) {
   return (
-    <div className="overflow-x-auto">
+    <div className="table-place">
       <table className="list-table">
         <thead>
           <tr>
@@ -33,10 +28,10 @@ export function PaperList() {
             <th scope="col">Changed</th>
           </tr>
         </thead>
-        <tbody>
-          {papers.data.papers.map((paper) => (
+        <tbody onKeyDown={moveRow}>
+          {rows.map((paper) => (
             <tr key={paper.id} className="row-link">
-              <td>
+              <td className="code">
                 <Link className="link font-mono text-sm" to={`/papers/${paper.id}`}>
                   {paper.code}
                 </Link>
@@ -54,5 +49,21 @@ export function PaperList() {
         </tbody>
       </table>
     </div>
+  );
+}
+
+/** Every paper with its state and its total. */
+export function PaperList() {
+  const papers = useQuery(papersQuery);
+  return (
+    <Awaited query={papers} what="the papers">
+      {({ papers: rows }) =>
+        rows.length === 0 ? (
+          <Empty>There is no paper yet. A setter begins the first.</Empty>
+        ) : (
+          <PaperTable rows={rows} />
+        )
+      }
+    </Awaited>
   );
 }

@@ -74,7 +74,7 @@ export function PlaceRow(props: PlaceRowProps) {
           <Newer place={place} busy={busy} {...(readOnly ? {} : { onChange })} />
         )}
       </td>
-      <td>{place.topic.name}</td>
+      <td className="whitespace-nowrap">{place.topic.name}</td>
       <td className="number">{place.marks}</td>
       <td className="whitespace-nowrap">
         {readOnly ? (

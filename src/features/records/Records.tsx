@@ -2,10 +2,11 @@ import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useSearchParams } from 'react-router';
 
 import { choosePeople } from '#shared/contracts/people.ts';
-import { listRecords } from '#shared/contracts/records.ts';
+import { listRecords, type RecordRow } from '#shared/contracts/records.ts';
+import { Awaited } from '#src/components/ui/Awaited.tsx';
 import { Pager } from '#src/components/ui/Pager.tsx';
-import { Empty, Failure, Loading } from '#src/components/ui/states.tsx';
-import { call, sentenceOf } from '#src/lib/api.ts';
+import { Empty } from '#src/components/ui/states.tsx';
+import { call } from '#src/lib/api.ts';
 import { countOf, formatDayAndTime } from '#src/lib/format.ts';
 
 const KINDS: readonly { event: string; name: string }[] = [
@@ -15,6 +16,31 @@ const KINDS: readonly { event: string; name: string }[] = [
   { event: 'person', name: 'People' },
   { event: 'session', name: 'Sessions' },
 ];
+
+function RecordTable({ rows }: { rows: readonly RecordRow[] }) {
+  return (
+    <div className="table-place">
+      <table className="list-table">
+        <thead>
+          <tr>
+            <th scope="col">When</th>
+            <th scope="col">Who</th>
+            <th scope="col">What</th>
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map((row) => (
+            <tr key={row.id}>
+              <td className="whitespace-nowrap">{formatDayAndTime(row.at)}</td>
+              <td className="whitespace-nowrap">{row.person?.name ?? 'the system'}</td>
+              <td className="w-full">{row.summary}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
 
 /** What was done, by whom and when; nobody can change it. */
 export function Records() {
@@ -74,41 +100,23 @@ export function Records() {
         </label>
         {records.isSuccess && <span className="text-muted">{countOf(records.data.total, 'record')}</span>}
       </div>
-      {records.isPending && <Loading what="the records" />}
-      {records.isError && (
-        <Failure message={sentenceOf(records.error)} onRetry={() => void records.refetch()} />
-      )}
-      {records.isSuccess && records.data.rows.length === 0 && <Empty>No record fits.</Empty>}
-      {records.isSuccess && records.data.rows.length > 0 && (
-        <div className="overflow-x-auto">
-          <table className="list-table">
-            <thead>
-              <tr>
-                <th scope="col">When</th>
-                <th scope="col">Who</th>
-                <th scope="col">What</th>
-              </tr>
-            </thead>
-            <tbody>
-              {records.data.rows.map((row) => (
-                <tr key={row.id}>
-                  <td className="whitespace-nowrap">{formatDayAndTime(row.at)}</td>
-                  <td className="whitespace-nowrap">{row.person?.name ?? 'the system'}</td>
-                  <td className="w-full">{row.summary}</td>
-                </tr>
-              ))}
-            </tbody>
-          </table>
-        </div>
-      )}
-      {records.isSuccess && (
-        <Pager
-          page={page}
-          pageSize={records.data.pageSize}
-          total={records.data.total}
-          onPage={(next) => choose('page', String(next))}
-        />
-      )}
+      <Awaited query={records} what="the records">
+        {({ rows, pageSize, total }) =>
+          rows.length === 0 ? (
+            <Empty>No record fits.</Empty>
+          ) : (
+            <>
+              <RecordTable rows={rows} />
+              <Pager
+                page={page}
+                pageSize={pageSize}
+                total={total}
+                onPage={(next) => choose('page', String(next))}
+              />
+            </>
+          )
+        }
+      </Awaited>
     </div>
   );
 }
