@@ -125,7 +125,7 @@ describe('wrong workings', () => {
     ['the factor 2 left out', 'v = sqrt(2 * e * 200 V / m_e)', 'v', 'm s^-1', ''],
     ['the root left out', 'v = sqrt(2 * e * 200 V / m_e)', 'v', 'm s^-1', ''],
     ['the mass of a proton taken', 'v = sqrt(2 * e * 200 V / m_e)', 'v', 'm s^-1', ''],
-    ['the square of “t” left out', 't = 2.0 s\ny = 0.5 * 3.0 m/s^2 * t^2', 'y', 'm', ''],
+    ['the square of “t” left out', 't = 3.0 s\ny = 0.5 * 3.0 m/s^2 * t^2', 'y', 'm', ''],
     ['“P / W” upside down', 'P = 3.0 J\nW = 2.0 J\nx = P / W', 'x', '', ''],
     ['“b” left out', 'a = 3.0 m\nb = 1.0 m\nx = a + b', 'x', 'm', ''],
     ['“b” taken with the wrong sign', 'a = 3.0 m\nb = 1.0 m\nx = a + b', 'x', 'm', ''],

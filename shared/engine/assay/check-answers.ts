@@ -17,7 +17,7 @@ function inWords({ part: { part, unit } }: PartMeasure, value: number): string {
 }
 
 /** 6. Every honest way of rounding lands inside the band, on every draw that is followed. */
-function tellRoutes(measure: PartMeasure): Finding[] {
+function tellRoutes(measure: PartMeasure, { percent }: PartScale['recommended']): Finding[] {
   const outside = measure.routes.filter((entry) => entry.outside.count > 0);
   const worst = outside.reduce<(typeof outside)[number] | null>(
     (most, entry) => (most === null || entry.outside.worstBadness > most.outside.worstBadness ? entry : most),
@@ -30,7 +30,10 @@ function tellRoutes(measure: PartMeasure): Finding[] {
     finding('route-outside-band', {
       about: part.id,
       statement: `In part (${letter}), on draw ${worst.outside.worstDraw}, ${routeInWords(worst.route, measure.part)} gives ${inWords(measure, value)} where the model answer is ${inWords(measure, answer)} and the band goes from ${inWords(measure, from)} to ${inWords(measure, to)}; ${drawsShow(worst.outside.count)}.`,
-      cure: 'Widen the band to the recommended one, or ask for fewer figures.',
+      cure:
+        percent === null
+          ? 'No tidy band takes every route: ask for fewer steps in one part, or print a value on the way.'
+          : `Widen the band to ±${percent} %, or ask for a value on the way to more figures.`,
       place: { partId: part.id },
       tally: worst.outside,
     }),
@@ -177,11 +180,14 @@ export function checkAnswers(context: AssayContext): RunningCheck & {
       for (const measure of measures) measure.visit(block);
     },
     finish: () =>
-      measures.flatMap((measure) => [
-        ...tellRoutes(measure),
-        ...tellUniqueness(context, measure),
-        ...tellBand(measure, scaleOf(measure).recommended),
-      ]),
+      measures.flatMap((measure) => {
+        const { recommended } = scaleOf(measure);
+        return [
+          ...tellRoutes(measure, recommended),
+          ...tellUniqueness(context, measure),
+          ...tellBand(measure, recommended),
+        ];
+      }),
     scales: () => measures.map(scaleOf),
     coverage: () => {
       const fewest = Math.min(...measures.map((measure) => measure.drawsFollowed));

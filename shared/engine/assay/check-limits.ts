@@ -23,7 +23,7 @@ interface Rule {
   code: FindingCode;
   names: string[];
   /** How badly the draw fails, or null when it holds. */
-  failure: (values: number[]) => number | null;
+  failure: (values: readonly number[]) => number | null;
   statement: (values: string[], draw: number, draws: string) => string;
   cure: string;
 }
@@ -169,9 +169,11 @@ function pairRules(context: AssayContext, set: BoundSet): Rule[] {
 
 function visitRule(rule: Rule, tally: Tally, worst: number[], block: BlockValues): void {
   const columns = rule.names.map((name) => block.columns.get(name));
+  // One array for all draws: a rule reads it and keeps nothing of it.
+  const values = columns.map(() => NaN);
   for (let index = 0; index < block.draws.length; index += 1) {
     if (block.kept[index] === 0) continue;
-    const values = columns.map((column) => column?.[index] ?? NaN);
+    for (let at = 0; at < columns.length; at += 1) values[at] = columns[at]?.[index] ?? NaN;
     const badness = rule.failure(values);
     if (badness === null) continue;
     if (badness > tally.worstBadness) worst.splice(0, worst.length, ...values);

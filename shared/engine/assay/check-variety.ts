@@ -108,7 +108,7 @@ export function checkVariety(
       };
       for (const entry of watched) {
         const { info, part } = entry.part;
-        const bands = bandsOfBlock(entry.part, block);
+        const bands = entry.answers.length < ENOUGH ? bandsOfBlock(entry.part, block) : null;
         const column = block.columns.get(info.name);
         if (column === undefined) continue;
         const alike = givens.filter(

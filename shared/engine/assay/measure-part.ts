@@ -22,8 +22,6 @@ export interface Reach {
   answer: number;
   /** Draws on which the answer lies in the band. */
   inside: Tally;
-  /** Closest approach to the band, in half-widths of the band beyond its end; negative inside. */
-  margin: number;
 }
 
 export interface MeasuredRoute {
@@ -73,7 +71,6 @@ const newReach = (): Reach => ({
   value: NaN,
   answer: NaN,
   inside: new Tally(),
-  margin: Infinity,
 });
 
 function note(reach: Reach, draw: number, value: number, answer: number, from: number, to: number): void {
@@ -86,10 +83,6 @@ function note(reach: Reach, draw: number, value: number, answer: number, from: n
     reach.answer = answer;
   }
   if (Math.abs(error) > Math.abs(reach.furthest)) reach.furthest = error;
-  const half = value >= answer ? to - answer : answer - from;
-  const beyond = value >= answer ? value - to : from - value;
-  const margin = half > 0 ? beyond / half : beyond / Math.abs(answer || 1);
-  if (margin < reach.margin) reach.margin = margin;
   if (within(value, from, to)) reach.inside.add(draw, -Math.abs(error));
 }
 

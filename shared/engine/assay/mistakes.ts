@@ -65,6 +65,10 @@ function mistakesOfBinary(node: Extract<ExpressionTree, { kind: 'binary' }>): Va
     case '*':
       return [
         ...(isPlain(left) ? [{ label: `the factor ${expressionText(left)} left out`, tree: right }] : []),
+        // Twos and halves are what candidates count double.
+        ...(left.kind === 'number' && isPlain(left) && (left.value === 2 || left.value === 0.5)
+          ? [{ label: `the factor ${left.literal} taken twice`, tree: { ...node, right: node } }]
+          : []),
         ...(isPlain(right) ? [{ label: `the factor ${expressionText(right)} left out`, tree: left }] : []),
       ];
     case '/': {
@@ -86,6 +90,10 @@ function mistakesOfBinary(node: Extract<ExpressionTree, { kind: 'binary' }>): Va
       const root = hasRoot(left) || hasRoot(right);
       return [
         { label: `${named(right)} left out`, tree: left },
+        {
+          label: `${named(left)} left out`,
+          tree: operator === '+' ? right : { kind: 'negate', operand: right, span: right.span },
+        },
         {
           label: root ? 'the other root of the equation taken' : `${named(right)} taken with the wrong sign`,
           tree: { ...node, operator: operator === '+' ? '-' : '+' },
