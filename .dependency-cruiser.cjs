@@ -179,7 +179,7 @@ module.exports = {
       'components-fetch-nothing',
       'A component shows what it is given, wherever it stands.',
       '^src/components/',
-      '(^src/(features|app)/|node_modules/@tanstack/react-query/)',
+      '^src/(features|app)/',
     ),
     never(
       'lib-knows-no-screen',

@@ -1,4 +1,3 @@
-import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { dirname, join } from 'node:path';
 
@@ -72,9 +71,4 @@ export function figureParagraphs(figure: SheetFigure, bitmaps: Bitmaps, id: numb
   });
   if (figure.caption === '') return [picture];
   return [picture, new Paragraph({ style: 'FigureCaption', text: figure.caption })];
-}
-
-/** Reads the fonts once, so that a missing file is noticed when the exporter starts. */
-export function checkFonts(): void {
-  for (const file of fontFiles) readFileSync(file);
 }

@@ -42,16 +42,6 @@ export function equation(latex: string): ParagraphChild {
   }
 }
 
-/** Why LaTeX cannot be set as a Word equation, or null when it can. */
-export function unprintableMaths(latex: string): string | null {
-  try {
-    latexToMath(latex);
-    return null;
-  } catch (error) {
-    return error instanceof Error ? error.message : 'This formula cannot be set.';
-  }
-}
-
 /** A line of the sheet as Word runs and equations. */
 export function inlineRuns(inlines: readonly Inline[], style: RunStyle = {}): ParagraphChild[] {
   return inlines.flatMap((inline): ParagraphChild[] => {

@@ -1,16 +1,7 @@
 import type { Role } from '#shared/domain/roles.ts';
 
-/** The invented consortium that the demo data belong to. */
-export const DEMO_CONSORTIUM = 'Larkmoor Assessment Consortium';
-
 /** One password for every demo person; printed at the start, and never used outside the demo. */
 export const DEMO_PASSWORD = 'oil drop at rest';
-
-export interface DemoPerson {
-  name: string;
-  email: string;
-  roles: Role[];
-}
 
 /** Five invented people, one for each role. */
 export const demoPeople = {
