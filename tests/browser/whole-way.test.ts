@@ -92,7 +92,9 @@ describe('one item', () => {
     await writer.getByRole('button', { name: 'Send to review' }).click();
     const dialog = writer.getByRole('dialog');
     await dialog.getByText(/no blocker/).waitFor();
-    await dialog.getByRole('combobox', { name: 'Reviewer' }).selectOption({ label: demoPeople.reviewer.name });
+    await dialog
+      .getByRole('combobox', { name: 'Reviewer' })
+      .selectOption({ label: demoPeople.reviewer.name });
     await dialog.getByLabel('Note for the reviewer').fill('Please look at the unit.');
     await dialog.locator('button[type=submit]').click();
     await writer.getByText('In review').first().waitFor();

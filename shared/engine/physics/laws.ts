@@ -3,7 +3,7 @@ import { LAWS_OF_DROPS } from './laws-of-drops.ts';
 import { LAWS_OF_MOTION } from './laws-of-motion.ts';
 import { LAWS_OF_LEVELS, LAWS_OF_MATTER_WAVES, LAWS_OF_PHOTONS } from './laws-of-quanta.ts';
 
-export { CHARGE, MASS, type LawRow, type RoleValues } from './law-row.ts';
+export { CHARGE, MASS, type LawRow } from './law-row.ts';
 
 /** Every law that is held against an item, each with the book it can be read in. */
 export const LAWS: readonly LawRow[] = [
