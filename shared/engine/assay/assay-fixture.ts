@@ -6,7 +6,7 @@ import type { AssayReport, Finding } from './report.ts';
 type ItemInput = z.input<typeof itemContentSchema>;
 
 /** What a test says of one numeric part; the rest is filled in soundly. */
-export interface PartInput {
+interface PartInput {
   quantity: string;
   unit?: string;
   figures?: number;

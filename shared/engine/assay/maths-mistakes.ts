@@ -1,5 +1,5 @@
 /** A formula that cannot be set, and where it stands in the text. */
-export interface MathsMistake {
+interface MathsMistake {
   message: string;
   start: number;
   end: number;

@@ -11,7 +11,7 @@ import { bandsOfBlock, within } from './part-marking.ts';
 import { followRoute, routesOf, type Route } from './routes.ts';
 
 /** How far a working's answers lie from the model answer over the draws, as relative errors. */
-export interface Reach {
+interface Reach {
   /** Signed, closest to the model answer. */
   closest: number;
   /** Signed, furthest from it. */
@@ -24,7 +24,7 @@ export interface Reach {
   inside: Tally;
 }
 
-export interface MeasuredRoute {
+interface MeasuredRoute {
   route: Route;
   reach: Reach;
   /** Draws on which this honest answer falls outside the band. */
@@ -33,7 +33,7 @@ export interface MeasuredRoute {
   worst: { value: number; answer: number; from: number; to: number } | null;
 }
 
-export interface MeasuredWorking {
+interface MeasuredWorking {
   kind: 'slip' | 'nearMiss';
   label: string;
   /** Whether it has the dimension of the answer. */

@@ -4,7 +4,7 @@ import { bandAround } from './answer-band.ts';
 import type { AssayPart } from './context.ts';
 
 /** Model answers and accepted intervals of one part over a block, in the answer's unit. */
-export interface PartBlock {
+interface PartBlock {
   answers: Float64Array;
   from: Float64Array;
   to: Float64Array;

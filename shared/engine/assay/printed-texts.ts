@@ -2,7 +2,7 @@ import { partLetter } from '../item/content.ts';
 import type { AssayContext } from './context.ts';
 
 /** One text of the item that prints. */
-export interface PrintedText {
+interface PrintedText {
   field: string;
   text: string;
   /** What it is called in a sentence. */

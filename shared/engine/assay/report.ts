@@ -26,14 +26,14 @@ const spanSchema = z.object({
 });
 
 /** Where a finding points: a stretch of the script, a part, a quantity, or a text with a hole in it. */
-export const findingPlaceSchema = z.object({
+const findingPlaceSchema = z.object({
   span: spanSchema.optional(),
   partId: z.string().optional(),
   quantity: z.string().optional(),
   field: z.string().optional(),
 });
 
-export const findingSchema = z.object({
+const findingSchema = z.object({
   /** Stable name of the finding within an item, by which a caution is accepted. */
   key: z.string(),
   check: z.enum(CHECKS),
@@ -52,7 +52,7 @@ export const findingSchema = z.object({
 export type Finding = z.infer<typeof findingSchema>;
 
 /** A value's spread over the assayed draws, in the printed unit. */
-export const distributionSchema = z.object({
+const distributionSchema = z.object({
   name: z.string(),
   unit: z.string(),
   least: z.number(),
@@ -64,7 +64,7 @@ export const distributionSchema = z.object({
 export type Distribution = z.infer<typeof distributionSchema>;
 
 /** One mark on a scale strip; relative errors are fractions of the model answer (0.02 is 2 %). */
-export const stripMarkSchema = z.object({
+const stripMarkSchema = z.object({
   kind: z.enum(['route', 'slip', 'nearMiss']),
   label: z.string(),
   /** Closest approach to the model answer over the draws. */
@@ -77,7 +77,7 @@ export const stripMarkSchema = z.object({
 export type StripMark = z.infer<typeof stripMarkSchema>;
 
 /** What the scale strip of one numeric part shows. */
-export const partScaleSchema = z.object({
+const partScaleSchema = z.object({
   partId: z.string(),
   quantity: z.string(),
   unit: z.string(),

@@ -65,7 +65,7 @@ export function bindRoles(context: AssayContext): BoundSet[] {
   for (const { name, role, set } of context.content.quantities) {
     if (role === null || !known.has(name)) continue;
     let names = sets.get(set);
-    if (names === undefined) sets.set(set, (names = new Map()));
+    if (names === undefined) sets.set(set, (names = new Map<string, string | null>()));
     names.set(role, names.has(role) ? null : name);
   }
   return [...sets].map(([set, names]) => {

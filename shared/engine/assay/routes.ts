@@ -17,7 +17,7 @@ export interface Route {
 }
 
 /** A show-that value of an earlier part, as its text states it. */
-export interface StatedValue {
+interface StatedValue {
   name: string;
   letter: string;
   figures: number;
@@ -26,7 +26,7 @@ export interface StatedValue {
 }
 
 /** Up to so many intermediates all combinations are tried. */
-export const MOST_COMBINED = 8;
+const MOST_COMBINED = 8;
 
 function subsets(names: readonly string[]): string[][] {
   if (names.length <= MOST_COMBINED) {
@@ -38,7 +38,7 @@ function subsets(names: readonly string[]): string[][] {
 }
 
 /** Values that earlier show-that parts state and that this part's working rests on. */
-export function statedValues(context: AssayContext, part: AssayPart): StatedValue[] {
+function statedValues(context: AssayContext, part: AssayPart): StatedValue[] {
   const rests = new Set(dependenciesOf(context.script, part.info.name).names);
   const holes = { script: context.script, quantities: context.content.quantities };
   return context.parts

@@ -29,7 +29,7 @@ const printedText = z
 const localId = z.string().regex(/^[A-Za-z0-9_-]{1,40}$/);
 
 /** How a named value of the script is written for people, and what it stands for in physics. */
-export const quantitySchema = z.object({
+const quantitySchema = z.object({
   /** The script's own name, as `Va`. */
   name: z.string().min(1).max(60),
   /** LaTeX, as `V_a`; empty means the name itself. */
@@ -46,7 +46,7 @@ export const quantitySchema = z.object({
 export type Quantity = z.infer<typeof quantitySchema>;
 
 /** The interval of answers that earn the mark, as its writer states it. */
-export const bandSchema = z.discriminatedUnion('kind', [
+const bandSchema = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('percent'), percent: z.number().min(0).max(100) }),
   z.object({ kind: z.literal('absolute'), plusMinus: z.number().min(0), unit: z.string().max(60) }),
   z.object({ kind: z.literal('lastFigure'), units: z.number().min(0).max(50) }),
@@ -55,7 +55,7 @@ export const bandSchema = z.discriminatedUnion('kind', [
 export type Band = z.infer<typeof bandSchema>;
 
 /** A known wrong working: an expression over the script's names, and what a marker does when it appears. */
-export const slipSchema = z.object({
+const slipSchema = z.object({
   id: localId,
   name: shortText,
   expression: z.string().max(400),
@@ -65,13 +65,13 @@ export const slipSchema = z.object({
 });
 export type Slip = z.infer<typeof slipSchema>;
 
-export const schemeLineSchema = z.object({
+const schemeLineSchema = z.object({
   text: printedText,
   marks: z.number().int().min(0).max(ITEM_LIMITS.marksPerPart),
 });
 export type SchemeLine = z.infer<typeof schemeLineSchema>;
 
-export const answerSchema = z.object({
+const answerSchema = z.object({
   /** Name of the script's quantity that is the right answer. */
   quantity: z.string().max(60),
   unit: z.string().max(60).default(''),
@@ -94,7 +94,7 @@ const partBase = {
   scheme: z.array(schemeLineSchema).max(ITEM_LIMITS.schemeLines).default([]),
 };
 
-export const partSchema = z.discriminatedUnion('kind', [
+const partSchema = z.discriminatedUnion('kind', [
   z.object({ ...partBase, kind: z.literal('numeric'), answer: answerSchema }),
   z.object({
     ...partBase,
@@ -113,7 +113,7 @@ export const partSchema = z.discriminatedUnion('kind', [
 export type Part = z.infer<typeof partSchema>;
 export type NumericPart = Extract<Part, { kind: 'numeric' | 'showThat' }>;
 
-export const itemFigureSchema = z.object({
+const itemFigureSchema = z.object({
   /** Id of the stored figure. */
   figureId: z.number().int().positive(),
   alternativeText: z.string().max(1_000).default(''),

@@ -1,5 +1,5 @@
 /** Sizes that school and first-degree apparatus reach; coherent SI. */
-export interface PlausibleRange {
+interface PlausibleRange {
   role: string;
   least: number;
   greatest: number;

@@ -5,7 +5,7 @@ const LIGHT = CONSTANTS.get('c')?.value ?? NaN;
 /** Density of dry air at 20 °C and 101.325 kPa, kg/m³ (handbooks; value from memory). */
 export const AIR_DENSITY = 1.204;
 /** Mean free path in air at 20 °C and 101.325 kPa, m (handbooks; value from memory). */
-export const MEAN_FREE_PATH = 66e-9;
+const MEAN_FREE_PATH = 66e-9;
 /** Breakdown field of air at atmospheric pressure, V/m: about 3 MV/m (CRC Handbook; value from memory). */
 export const AIR_BREAKDOWN_FIELD = 3e6;
 

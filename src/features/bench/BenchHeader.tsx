@@ -36,7 +36,7 @@ export function BenchHeader(props: BenchHeaderProps) {
           <span className="font-mono text-base font-normal text-muted">{item.code}</span>{' '}
           {content.title === '' ? 'Untitled item' : content.title}
         </h1>
-        <p className="flex flex-wrap gap-x-4 text-sm">
+        <p className="flex flex-wrap items-baseline gap-x-4 text-sm">
           <span>{ITEM_STATE_NAMES[item.state]}</span>
           <span className="text-muted">Revision {item.revision.number}</span>
           <span className="text-muted">{countOf(marks, 'mark')}</span>

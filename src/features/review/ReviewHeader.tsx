@@ -24,7 +24,7 @@ export function ReviewHeader({ review, itemPath }: { review: Review; itemPath: s
         <span className="font-mono text-base font-normal text-muted">{review.itemCode}</span>{' '}
         {review.itemTitle}
       </h1>
-      <p className="flex flex-wrap gap-x-4 text-sm">
+      <p className="flex flex-wrap items-baseline gap-x-4 text-sm">
         <span>{stage}</span>
         <span className="text-muted">Revision {review.revision}</span>
         <span className="text-muted">{review.topic.name}</span>

@@ -75,12 +75,17 @@ export function StripPicture(props: StripPictureProps) {
   const { geometry, axis, band, active, onActive, onMove, onSettle, onVisitDraw } = props;
   const svg = useRef<SVGSVGElement>(null);
   const { width, centre, left, right, range } = geometry;
-  const endLabels = endLabelsOf(geometry);
-  const reserved = endLabels.map(({ text, side }) =>
-    side === 'low' ? { from: 0, to: labelWidth(text) } : { from: width - labelWidth(text), to: width },
-  );
+  const endLabels = endLabelsOf(geometry).map((label) => {
+    const wide = labelWidth(label.text) + 8;
+    const stretch = label.side === 'low' ? { from: 0, to: wide } : { from: width - wide, to: width };
+    return { ...label, stretch, free: !geometry.marks.some(({ x }) => x > stretch.from && x < stretch.to) };
+  });
+  const reserved = endLabels.filter((label) => label.free).map((label) => label.stretch);
   const labels = placeLabels(geometry.marks, width, width < 480 ? 3 : 4, reserved);
-  const lanes = labels.reduce((most, label) => Math.max(most, label.lane + 1), endLabels.length > 0 ? 1 : 0);
+  const used = labels.reduce((most, label) => Math.max(most, label.lane + 1), 0);
+  const lanes = endLabels.some((label) => !label.free)
+    ? used + 1
+    : Math.max(used, Math.min(1, endLabels.length));
   const ruleY = lanes * LANE + RULE_ROOM;
   const height = ruleY + SCALE_ROOM;
   const stops = stopsOf(geometry);
@@ -116,7 +121,8 @@ export function StripPicture(props: StripPictureProps) {
   const errorAt = (clientX: number): number => {
     const box = svg.current?.getBoundingClientRect();
     const x = box === undefined || box.width === 0 ? centre : ((clientX - box.left) / box.width) * width;
-    return xToError(x, width, range);
+    const step = keyStep(range);
+    return Math.round(xToError(x, width, range) / step) * step;
   };
 
   return (
@@ -162,11 +168,11 @@ export function StripPicture(props: StripPictureProps) {
         y2={ruleY - 3}
         className={props.routesFit ? 'strip-spread' : 'strip-spread strip-outside'}
       />
-      {endLabels.map(({ side, text }) => (
+      {endLabels.map(({ side, text, free }) => (
         <text
           key={side}
           x={side === 'low' ? 0 : width}
-          y={ruleY - RULE_ROOM - 2}
+          y={ruleY - RULE_ROOM - 2 - (free ? 0 : used * LANE)}
           textAnchor={side === 'low' ? 'start' : 'end'}
           className="strip-label"
           aria-hidden="true"

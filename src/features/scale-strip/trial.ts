@@ -1,5 +1,6 @@
 import type { PartScale } from '#shared/engine/index.ts';
 import type { Interval } from './geometry.ts';
+import { tidyStep } from './ticks.ts';
 
 /**
  * The scale as it would be with another band: which wrong workings fall inside, and whether every route
@@ -28,7 +29,7 @@ export function movedEnd(band: Interval, end: 'low' | 'high', to: number): Inter
   return end === 'low' ? { ...band, low: Math.min(0, tidy) } : { ...band, high: Math.max(0, tidy) };
 }
 
-/** How far one press of an arrow key moves a band end: a hundredth of the scale, tidy. */
+/** How far one press of an arrow key moves a band end: about a hundredth of the scale, tidy. Dragging goes in the same steps. */
 export function keyStep(range: number): number {
-  return Math.max(1e-5, Number((range / 100).toPrecision(1)));
+  return Math.max(1e-5, tidyStep(range / 100));
 }

@@ -16,7 +16,7 @@ export interface DemoFigure {
  * they show what the checker and the review catch.
  */
 export type DemoLife =
-  'drafting' | 'waiting' | 'working' | 'returned' | 'approved' | 'revised' | 'withdrawn' | 'faulty';
+  'drafting' | 'waiting' | 'working' | 'returned' | 'approved' | 'withdrawn' | 'faulty';
 
 /** One invented item with the state it is brought to. */
 export interface DemoItem {
