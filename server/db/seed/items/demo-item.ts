@@ -15,8 +15,7 @@ export interface DemoFigure {
  * How far a demo item has come. `faulty` items stand in review although they should never have got there:
  * they show what the checker and the review catch.
  */
-export type DemoLife =
-  'drafting' | 'waiting' | 'working' | 'returned' | 'approved' | 'withdrawn' | 'faulty';
+export type DemoLife = 'drafting' | 'waiting' | 'working' | 'returned' | 'approved' | 'withdrawn' | 'faulty';
 
 /** One invented item with the state it is brought to. */
 export interface DemoItem {
