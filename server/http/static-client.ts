@@ -19,6 +19,7 @@ export function serveClient(app: Express, folder: string): void {
   );
   app.use(express.static(folder, { maxAge: 0, index: false, redirect: false }));
   app.get('/{*path}', (_request, response) => {
-    response.set('Cache-Control', 'no-cache').sendFile(join(folder, 'index.html'));
+    // The folder is the root: in a whole path any part that begins with a dot would be refused.
+    response.set('Cache-Control', 'no-cache').sendFile('index.html', { root: folder });
   });
 }
